@@ -1,0 +1,61 @@
+namespace CoreDesign.Magnetics.Geometry;
+
+public enum CoreForm
+{
+    SinglePhaseTwoLimb,
+    ThreeLimb,
+}
+
+/// <summary>One step: plate width of limb and yoke, and the thickness of the plates of that width alone, both sides of the axis together (gross, coatings included).</summary>
+public readonly record struct CoreStep(double LimbWidth_m, double YokeWidth_m, double Stack_m);
+
+public enum CorePartKind
+{
+    Limb,
+    Yoke,
+
+    /// <summary>Common part of limb and yoke packets at an outer limb.</summary>
+    Corner,
+
+    /// <summary>Common part at the middle limb of a three-limb core.</summary>
+    TZone,
+}
+
+/// <summary>
+/// A part of the core as the magnetic circuit sees it. Name: limbA, yokeABTop, cornerATop, tZoneTop, … Net area is steel;
+/// Volume is net steel, and Length is volume over area, so that the circuit and the scales agree on the mass.
+/// </summary>
+public sealed record CorePart(string Name, CorePartKind Kind, double NetArea_m2, double Length_m, double Volume_m3);
+
+public enum PlateShape
+{
+    OuterLimb,
+    MiddleLimb,
+    Yoke,
+}
+
+/// <summary>
+/// A kind of plate that would be cut: outline of the middle joint position in metres, origin at its lower left corner, counter-clockwise,
+/// area by the shoelace rule; net thickness is the share of the stack that these pieces fill, summed over all of them.
+/// </summary>
+public sealed record CorePlate(int Step, PlateShape Shape, int Pieces, double Width_m, double LongSide_m, double ShortSide_m, IReadOnlyList<(double X_m, double Y_m)> Outline, double Area_m2, double NetVolume_m3);
+
+/// <summary>A stacked core, derived whole from its steps and window; lengths in metres.</summary>
+public sealed record CoreGeometry
+{
+    public required CoreForm Form { get; init; }
+    public required IReadOnlyList<CoreStep> Steps { get; init; }
+    public required double StackingFactor { get; init; }
+    public required double WindowHeight_m { get; init; }
+    public required double WindowWidth_m { get; init; }
+    public required double LimbPitch_m { get; init; }
+    public required double CircleDiameter_m { get; init; }
+    public required double GrossLimbArea_m2 { get; init; }
+    public required double NetLimbArea_m2 { get; init; }
+    public required double NetYokeArea_m2 { get; init; }
+    public required double StackHeight_m { get; init; }
+    public required double OverallWidth_m { get; init; }
+    public required double OverallHeight_m { get; init; }
+    public required IReadOnlyList<CorePart> Parts { get; init; }
+    public required IReadOnlyList<CorePlate> Plates { get; init; }
+}
