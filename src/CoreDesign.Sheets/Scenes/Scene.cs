@@ -25,6 +25,20 @@ public enum Ink
     Share3,
     Share4,
     Share5,
+
+    /// <summary>Ground that lies behind lit things.</summary>
+    AccentSoft,
+
+    /// <summary>The page behind the drawing, for haloes and knock-outs.</summary>
+    Paper,
+
+    /// <summary>The two sides of a drawn joint book.</summary>
+    SheetA,
+    SheetB,
+
+    /// <summary>Black and white in every theme: figures and joint lines that stand on the ramp, which is the same everywhere.</summary>
+    Black,
+    White,
 }
 
 /// <summary>A paint: a role, or a place 0..1 on the reading ramp (<see cref="Ramp"/> set), dark = nearer the limit.</summary>
@@ -49,6 +63,9 @@ public abstract record Mark
 {
     public string? FieldKey { get; init; }
     public string? Label { get; init; }
+
+    /// <summary>What the mark is within its group, as a short class for the page's style sheet: <c>dl</c> dimension line, <c>ex</c> extension line, <c>ar</c> arrow, <c>dt</c> dimension text.</summary>
+    public string? Part { get; init; }
 }
 
 public readonly record struct XY(double X, double Y);
@@ -61,4 +78,8 @@ public sealed record CircleMark(XY Centre, double Radius, Paint Fill, Paint Stro
 public sealed record TextMark(XY At, string Text, double Size, Anchor Anchor, Paint Fill, bool Bold = false, bool Italic = false, double Angle = 0) : Mark;
 
 /// <summary>Marks that belong together, e.g. a dimension line with its arrows and figure.</summary>
-public sealed record GroupMark(IReadOnlyList<Mark> Marks) : Mark;
+public sealed record GroupMark(IReadOnlyList<Mark> Marks) : Mark
+{
+    /// <summary>Line along which the group can be pressed; painted 24 px wide and clear on the page, left out on paper.</summary>
+    public IReadOnlyList<XY>? Hit { get; init; }
+}
