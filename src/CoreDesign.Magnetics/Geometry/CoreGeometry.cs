@@ -35,8 +35,9 @@ public enum PlateShape
 }
 
 /// <summary>
-/// A kind of plate that would be cut: outline of the middle joint position in metres, origin at its lower left corner, counter-clockwise,
-/// area by the shoelace rule; net thickness is the share of the stack that these pieces fill, summed over all of them.
+/// A kind of plate that would be cut: outline of the middle joint position in metres, counter-clockwise, X along the rolling direction, origin at
+/// the lower left of the box around it; area by the shoelace rule. <c>Step</c> counts from 1, the widest; <c>Pieces</c> is how many lie in one layer;
+/// long and short side run along the plate; the net volume is steel, over all pieces and the share of the stack that they fill.
 /// </summary>
 public sealed record CorePlate(int Step, PlateShape Shape, int Pieces, double Width_m, double LongSide_m, double ShortSide_m, IReadOnlyList<(double X_m, double Y_m)> Outline, double Area_m2, double NetVolume_m3);
 
