@@ -1,0 +1,150 @@
+using CoreDesign.Estimating.Contracts;
+
+namespace CoreDesign.Web.Features.Design;
+
+/// <summary>
+/// The design page without its screen: texts as typed, pins, undo, messages, and the last answer with the texts it stands for.
+/// One circuit uses it; it is not safe for use from several threads.
+/// </summary>
+public sealed class DesignPageState
+{
+    private readonly UndoStack undo = new();
+    private readonly HashSet<string> touched = new(StringComparer.Ordinal);
+    private FormReading reading = FormReader.Read(DesignText.Empty, DesignText.Empty);
+    private IReadOnlyList<FieldError> refused = [];
+
+    public DesignText Typed { get; private set; } = DesignText.Empty;
+
+    /// <summary>The texts for which <see cref="Estimate"/> stands.</summary>
+    public DesignText Solved { get; private set; } = DesignText.Empty;
+
+    public EstimateResult? Estimate { get; private set; }
+    public DerivedTexts Derived { get; private set; } = DerivedTexts.None;
+    public IReadOnlyList<LeverResult>? Levers { get; private set; }
+    public IReadOnlyList<VoltagePointResult>? VoltageCurve { get; private set; }
+    public Unsolvable? Unsolvable { get; private set; }
+
+    /// <summary>Grows with every edit; an answer to an older one is dropped.</summary>
+    public long Serial { get; private set; }
+
+    public bool CanUndo => undo.CanUndo;
+    public bool CanRedo => undo.CanRedo;
+
+    public DesignRequest Request => DesignRequest.From(reading);
+
+    /// <summary>True where a typed text is not what the figures stand for.</summary>
+    public bool FiguresAreOld => Estimate is not null && (reading.Errors.Count > 0 || refused.Count > 0 || Unsolvable is not null);
+
+    /// <summary>True where everything typed is valid and answered, so that it can be saved.</summary>
+    public bool IsComplete => Estimate is not null && !FiguresAreOld && Solved.Equals(Typed);
+
+    public void Load(DesignText texts)
+    {
+        undo.Clear();
+        touched.Clear();
+        Set(texts);
+    }
+
+    public void Type(string path, string text)
+    {
+        if (Typed[path] == text)
+        {
+            return;
+        }
+
+        touched.Add(path);
+        undo.Keep(Typed, path);
+        Set(FormRules.Type(Typed, path, text, Estimate?.Geometry));
+    }
+
+    /// <summary>The field lost the focus: the next keystroke in it is a new step of undo.</summary>
+    public void Leave(string path)
+    {
+        touched.Add(path);
+        undo.Close();
+    }
+
+    /// <summary>Gives a pinned field back to its derived value.</summary>
+    public void Release(string path) =>
+        Step(path == FormPaths.LimbSteps ? FormRules.ReleaseSteps(Typed, Estimate?.Geometry) : Typed.Without(path));
+
+    public void PinSteps() => Step(FormRules.PinSteps(Typed, Estimate?.Geometry));
+
+    public void RemoveStep(int row) => Step(FormRules.RemoveStep(FormRules.PinSteps(Typed, Estimate?.Geometry), row));
+
+    /// <summary>Takes several values at once, as one step of undo.</summary>
+    public void Take(IEnumerable<KeyValuePair<string, string>> values) =>
+        Step(values.Aggregate(Typed, (texts, v) => FormRules.Type(texts, v.Key, v.Value, Estimate?.Geometry)));
+
+    /// <summary>Tries a solved change: only what the lever changed is typed, what was open stays open.</summary>
+    public void Try(LeverResult lever)
+    {
+        var sent = DesignJson.Flatten(Request.Design);
+        var used = Estimate is null ? sent : DesignJson.Flatten(Estimate.Inputs);
+        Take(DesignJson.Flatten(lever.Design)
+            .Where(v => !(sent.TryGetValue(v.Key, out var s) || used.TryGetValue(v.Key, out s)) || !Equals(s, v.Value))
+            .Select(v => KeyValuePair.Create(v.Key, v.Value is double n ? NumberText.Exact(n) : (string)v.Value)));
+    }
+
+    public void Undo() => Set(undo.Undo(Typed));
+
+    public void Redo() => Set(undo.Redo(Typed));
+
+    /// <summary>Takes the answer to edit <paramref name="serial"/>; false where it came too late.</summary>
+    public bool Accept(long serial, DesignText solvedFor, Outcome<EstimateResult> outcome)
+    {
+        if (serial != Serial)
+        {
+            return false;
+        }
+
+        refused = outcome.Errors;
+        Unsolvable = outcome.Unsolvable;
+        if (outcome.Value is { } estimate)
+        {
+            Estimate = estimate;
+            Derived = DerivedTexts.From(estimate);
+            Solved = solvedFor;
+            Levers = null;
+            VoltageCurve = null;
+        }
+
+        return true;
+    }
+
+    /// <summary>Takes levers and curve of edit <paramref name="serial"/>; false where they came too late.</summary>
+    public bool Accept(long serial, IReadOnlyList<LeverResult> levers, IReadOnlyList<VoltagePointResult> curve)
+    {
+        if (serial != Serial)
+        {
+            return false;
+        }
+
+        Levers = levers;
+        VoltageCurve = curve;
+        return true;
+    }
+
+    public DesignText Standing => reading.Standing;
+
+    /// <summary>Messages by field; a field that was left open is not called wrong before it was visited.</summary>
+    public FieldMessages Messages => new(Typed, reading, refused, touched, Estimate is null ? null : Solved, Derived);
+
+    private void Step(DesignText texts)
+    {
+        if (texts.Equals(Typed))
+        {
+            return;
+        }
+
+        undo.Keep(Typed, null);
+        Set(texts);
+    }
+
+    private void Set(DesignText texts)
+    {
+        Typed = texts;
+        reading = FormReader.Read(texts, reading.Standing);
+        Serial++;
+    }
+}

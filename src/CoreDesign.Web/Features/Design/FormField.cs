@@ -1,0 +1,47 @@
+using CoreDesign.Estimating.Fields;
+
+namespace CoreDesign.Web.Features.Design;
+
+public enum FieldKind
+{
+    Number,
+
+    /// <summary>Several numbers in one field, with a slash or semicolon between them.</summary>
+    NumberList,
+    Choice,
+    Text,
+}
+
+/// <summary>One line of the form. Label, unit and range come from the field catalogue unless the page says otherwise.</summary>
+public sealed record FormField(string Path, FieldKind Kind = FieldKind.Number)
+{
+    private readonly string? label;
+    private readonly Field? own;
+
+    /// <summary>True where an open field is derived or has a default, so that a typed value is a pin that can be released.</summary>
+    public bool Derivable { get; init; }
+
+    /// <summary>Descriptor of a field that is the page's own.</summary>
+    public Field? Own { init => own = value; }
+
+    public Field? Descriptor => own ?? FieldCatalog.TryFind(Kind == FieldKind.NumberList ? Path + "[]" : Path);
+
+    public string Label { get => label ?? Descriptor?.Label ?? Path; init => label = value; }
+
+    public string Unit => Descriptor?.Unit ?? "";
+
+    /// <summary>The hint on the field: what it is and which range it takes.</summary>
+    public string Hint => Descriptor is { } d ? Kind == FieldKind.NumberList ? $"{d.Help}: {d.Range}, with / between" : $"{d.Help}: {d.Range}" : "";
+
+    public IReadOnlyList<FormChoice> Choices { get; init; } = [];
+
+    /// <summary>Id of the input, by which labels, messages and dimension lines find it.</summary>
+    public string Id => IdOf(Path);
+
+    public static string IdOf(string path) => "f-" + path.Replace('.', '-').Replace('[', '-').Replace("]", "", StringComparison.Ordinal);
+}
+
+public sealed record FormChoice(string Value, string Label);
+
+/// <summary>A group of lines under one heading.</summary>
+public sealed record FormSection(string Key, string Title, IReadOnlyList<FormField> Fields);

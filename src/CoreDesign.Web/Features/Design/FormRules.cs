@@ -1,0 +1,115 @@
+using System.Text.RegularExpressions;
+using CoreDesign.Estimating.Contracts;
+
+namespace CoreDesign.Web.Features.Design;
+
+/// <summary>Fields that answer the same question: typing one releases the others. Undo brings them back.</summary>
+public static partial class FormRules
+{
+    public static DesignText Type(DesignText texts, string path, string text, GeometryResult? geometry)
+    {
+        if (path.StartsWith(FormPaths.LimbSteps + "[", StringComparison.Ordinal))
+        {
+            texts = PinSteps(texts, geometry);
+        }
+        else if (path.StartsWith(FormPaths.YokeWidths + "[", StringComparison.Ordinal))
+        {
+            texts = PinYoke(texts, geometry);
+        }
+        else if (text.Trim().Length > 0)
+        {
+            texts = Displace(texts, path, text);
+        }
+
+        return texts.With(path, text);
+    }
+
+    /// <summary>Takes the derived step set as the start of one's own; the circle waits until the steps are released.</summary>
+    public static DesignText PinSteps(DesignText texts, GeometryResult? geometry)
+    {
+        if (texts.HasItems(FormPaths.LimbSteps))
+        {
+            return texts;
+        }
+
+        texts = texts.With(FormPaths.KeptDiameter, texts[FormPaths.Diameter]).With(FormPaths.KeptStepCount, texts[FormPaths.StepCount])
+            .Without(FormPaths.Diameter).Without(FormPaths.StepCount);
+        var steps = geometry?.LimbSteps ?? [];
+        for (var i = 0; i < steps.Count; i++)
+        {
+            texts = texts.With(FormPaths.StepWidth(i), NumberText.Short(steps[i].Width_mm, 6)).With(FormPaths.StepStack(i), NumberText.Short(steps[i].Stack_mm, 6));
+        }
+
+        return texts;
+    }
+
+    /// <summary>Gives the step set back to the circle that it came from, or to the circle around it.</summary>
+    public static DesignText ReleaseSteps(DesignText texts, GeometryResult? geometry)
+    {
+        var diameter = texts[FormPaths.KeptDiameter];
+        var count = texts[FormPaths.KeptStepCount];
+        if (diameter.Length == 0 && geometry is not null)
+        {
+            diameter = NumberText.Exact(Math.Ceiling(geometry.CircleDiameter_mm - 1e-6));
+            count = NumberText.Exact(geometry.LimbSteps.Count);
+        }
+
+        return texts.Without(FormPaths.LimbSteps).Without("form.kept").With(FormPaths.Diameter, diameter).With(FormPaths.StepCount, count);
+    }
+
+    /// <summary>Takes away one row of the hand-typed steps.</summary>
+    public static DesignText RemoveStep(DesignText texts, int row)
+    {
+        var rows = StepRows(texts);
+        for (var i = row; i < rows; i++)
+        {
+            texts = texts.With(FormPaths.StepWidth(i), texts[FormPaths.StepWidth(i + 1)]).With(FormPaths.StepStack(i), texts[FormPaths.StepStack(i + 1)]);
+            texts = texts.HasItems(FormPaths.YokeWidths) ? texts.With(FormPaths.YokeWidth(i), texts[FormPaths.YokeWidth(i + 1)]) : texts;
+        }
+
+        return texts;
+    }
+
+    /// <summary>Rows of the hand-typed step table; 0 where the steps are derived.</summary>
+    public static int StepRows(DesignText texts) =>
+        texts.All.Select(p => StepCell().Match(p.Key)).Where(m => m.Success).Select(m => int.Parse(m.Groups["row"].Value, System.Globalization.CultureInfo.InvariantCulture) + 1).DefaultIfEmpty(0).Max();
+
+    private static DesignText PinYoke(DesignText texts, GeometryResult? geometry)
+    {
+        if (texts.HasItems(FormPaths.YokeWidths))
+        {
+            return texts;
+        }
+
+        texts = texts.Without(FormPaths.YokeFactor).Without(FormPaths.YokeHeight);
+        var steps = geometry?.LimbSteps ?? [];
+        for (var i = 0; i < steps.Count; i++)
+        {
+            texts = texts.With(FormPaths.YokeWidth(i), NumberText.Short(steps[i].YokeWidth_mm, 6));
+        }
+
+        return texts;
+    }
+
+    private static DesignText Displace(DesignText texts, string path, string text) => path switch
+    {
+        FormPaths.WindowWidth => texts.Without(FormPaths.LimbPitch),
+        FormPaths.LimbPitch => texts.Without(FormPaths.WindowWidth),
+        FormPaths.YokeFactor => texts.Without(FormPaths.YokeHeight).Without(FormPaths.YokeWidths),
+        FormPaths.YokeHeight => texts.Without(FormPaths.YokeFactor).Without(FormPaths.YokeWidths),
+        FormPaths.Diameter or FormPaths.StepCount or FormPaths.StockWidths when texts.HasItems(FormPaths.LimbSteps) => ReleaseSteps(texts, null),
+        FormPaths.Form => MatchConnection(texts, text),
+        FormPaths.JointType => texts.Without("joint.positions"),
+        _ => texts,
+    };
+
+    private static DesignText MatchConnection(DesignText texts, string form)
+    {
+        var allowed = FormLayout.Connections(form);
+        var typed = texts[FormPaths.Connection];
+        return typed.Length == 0 || allowed.Any(c => c.Value == typed) ? texts : texts.With(FormPaths.Connection, allowed[0].Value);
+    }
+
+    [GeneratedRegex(@"^core\.limbSteps\[(?<row>\d{1,3})\]", RegexOptions.ExplicitCapture, 1000)]
+    private static partial Regex StepCell();
+}
