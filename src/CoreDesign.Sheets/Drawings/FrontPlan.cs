@@ -1,0 +1,154 @@
+using CoreDesign.Estimating.Contracts;
+using CoreDesign.Sheets.Scenes;
+
+namespace CoreDesign.Sheets.Drawings;
+
+/// <summary>
+/// Where everything of the front view stands: the scale, the core's place, and for each dimension the row under the core, the
+/// column left of it, or its window. The margins depend on which texts fit at the scale and the scale on the margins, so they are found in turn.
+/// </summary>
+internal sealed class FrontPlan
+{
+    private const double FirstLine = 24;
+    private readonly EstimateResult _r;
+    private readonly DrawingOptions _o;
+    private readonly DimensionPen _pen;
+    private readonly double _callouts;
+
+    /// <param name="callouts">Width of the notes at the right, 0 without any.</param>
+    public FrontPlan(EstimateResult r, DrawingOptions o, double callouts)
+    {
+        (_r, _o, _callouts) = (r, o, callouts);
+        _pen = new DimensionPen(o);
+        WithDimensions = o.Dimensions && o is { Width: >= 360, Height: >= 280 };
+        WithNotes = o.Notes && o is { Width: >= 360, Height: >= 280 };
+        Windows = CoreZones.Limbs(r.Geometry) - 1;
+        Find();
+    }
+
+    public bool WithDimensions { get; }
+
+    public bool WithNotes { get; }
+
+    public int Windows { get; }
+
+    public double Scale { get; private set; }
+
+    public Box Core { get; private set; }
+
+    public List<List<DimensionText>> Rows { get; private set; } = [];
+
+    public List<List<DimensionText>> Columns { get; private set; } = [];
+
+    public DimensionText? InsideHeight { get; private set; }
+
+    public DimensionText? InsideWidth { get; private set; }
+
+    public double CalloutX => Core.Right + 42;
+
+    public double RowY(int row) => Core.Bottom + FirstLine + (row * _pen.Pitch);
+
+    public double ColumnX(int column) => Core.X - FirstLine - (column * _pen.Pitch);
+
+    public double X(double mm) => Core.X + (mm * Scale);
+
+    public double Y(double mm) => Core.Y + (mm * Scale);
+
+    public Box Place(Box mm) => new(X(mm.X), Y(mm.Y), mm.Width * Scale, mm.Height * Scale);
+
+    private void Find()
+    {
+        var g = _r.Geometry;
+        double left = 0, right = 0, top = 0, bottom = 0;
+        for (var turn = 0; turn < 8; turn++)
+        {
+            Scale = _o.Scale ?? Math.Max(Math.Min((_o.Width - left - right) / g.OverallWidth_mm, (_o.Height - top - bottom) / g.OverallHeight_mm), 1e-9);
+            Assign();
+            var (l, ri, t, b) = Margins();
+            if (l <= left && ri <= right && t <= top && b <= bottom)
+            {
+                break;
+            }
+
+            // Margins only grow, so this ends: a text that moved out stays out.
+            (left, right, top, bottom) = (Math.Max(l, left), Math.Max(ri, right), Math.Max(t, top), Math.Max(b, bottom));
+        }
+
+        double w = g.OverallWidth_mm * Scale, h = g.OverallHeight_mm * Scale;
+        if (_o.Scale is not null && (w > _o.Width - left - right + 0.01 || h > _o.Height - top - bottom + 0.01))
+        {
+            throw new ArgumentException($"At the scale {_o.Scale} the core needs {w + left + right:F0} by {h + top + bottom:F0}, but the drawing is {_o.Width:F0} by {_o.Height:F0}; take a smaller scale.");
+        }
+
+        Core = new Box(left + ((_o.Width - left - right - w) / 2), top + ((_o.Height - top - bottom - h) / 2), w, h);
+    }
+
+    private void Assign()
+    {
+        (Rows, Columns, InsideHeight, InsideWidth) = ([], [], null, null);
+        if (!WithDimensions)
+        {
+            return;
+        }
+
+        var g = _r.Geometry;
+        var core = _r.Inputs.Core;
+        double w = g.LimbWidth_mm, ww = g.WindowWidth_mm, h = g.YokeHeight_mm, wh = g.WindowHeight_mm, s = Scale;
+        var last = Windows * g.LimbPitch_mm;
+        var stepsTyped = FieldState.Typed(_r, "core.limbSteps", core?.LimbSteps is { Count: > 0 });
+        var yokeTyped = FieldState.Typed(_r, "core.yoke.stepWidths_mm", core?.Yoke?.StepWidths_mm is { Count: > 0 });
+        var limbWidth = DimensionText.Of("Limb width", w, 0, w, stepsTyped ? "core.limbSteps" : null, stepsTyped);
+        var windowWidth = DimensionText.Of("Window width", ww, last - ww, last, "core.windowWidth_mm", FieldState.Typed(_r, "core.windowWidth_mm", core?.WindowWidth_mm is not null));
+        var pitch = DimensionText.Of("Limb pitch", g.LimbPitch_mm, last - g.LimbPitch_mm + (w / 2), last + (w / 2), "core.limbPitch_mm", FieldState.Typed(_r, "core.limbPitch_mm", core?.LimbPitch_mm is not null));
+        var overallWidth = DimensionText.Of("Overall width", g.OverallWidth_mm, 0, g.OverallWidth_mm, null, false);
+        var yokeHeight = DimensionText.Of("Yoke height", h, 0, h, yokeTyped ? "core.yoke.stepWidths_mm" : "core.yoke.areaFactor", yokeTyped);
+        var windowHeight = DimensionText.Of("Window height", wh, h, h + wh, "core.windowHeight_mm", FieldState.Typed(_r, "core.windowHeight_mm", core?.WindowHeight_mm is not null));
+        var overallHeight = DimensionText.Of("Overall height", g.OverallHeight_mm, 0, g.OverallHeight_mm, null, false);
+
+        // Width across the window, height in another one, so that no dimension line crosses another.
+        if (_pen.Fits(windowWidth, (ww * s) - 8) && wh * s >= 5 * _o.DimensionSize)
+        {
+            InsideWidth = windowWidth;
+        }
+
+        if (Windows > 1 && ww * s >= 3 * _o.DimensionSize && _pen.Fits(windowHeight, (wh * s) - 8))
+        {
+            InsideHeight = windowHeight;
+        }
+
+        Stack(Rows, [limbWidth, .. InsideWidth is null ? new[] { windowWidth } : [], pitch, overallWidth], d => (d.To_mm - d.From_mm) * s);
+        Stack(Columns, [yokeHeight, .. InsideHeight is null ? new[] { windowHeight } : [], overallHeight], d => (d.To_mm - d.From_mm) * s);
+    }
+
+    // One row for a chain that doesn't overlap and whose texts fit; whatever must put its text outside has a row to itself.
+    private void Stack(List<List<DimensionText>> rows, IEnumerable<DimensionText> all, Func<DimensionText, double> span)
+    {
+        foreach (var d in all)
+        {
+            var shares = rows.Count > 0 && _pen.Fits(d, span(d)) && rows[^1].TrueForAll(o => _pen.Fits(o, span(o)) && o.To_mm <= d.From_mm + 1e-9);
+            if (shares)
+            {
+                rows[^1].Add(d);
+            }
+            else
+            {
+                rows.Add([d]);
+            }
+        }
+    }
+
+    private (double Left, double Right, double Top, double Bottom) Margins()
+    {
+        if (!WithDimensions && !WithNotes)
+        {
+            return (3, 3, _o.TextSize + 8, 3);
+        }
+
+        var outsideRow = Rows.SelectMany(r => r).Where(d => !_pen.Fits(d, (d.To_mm - d.From_mm) * Scale)).Select(d => _pen.Width(d) + DimensionPen.Tail + 8).DefaultIfEmpty(0).Max();
+        var outsideColumn = Columns.SelectMany(r => r).Where(d => !_pen.Fits(d, (d.To_mm - d.From_mm) * Scale)).Select(d => _pen.Width(d) + DimensionPen.Tail + 8).DefaultIfEmpty(0).Max();
+        var left = Columns.Count == 0 ? 8 : FirstLine + ((Columns.Count - 1) * _pen.Pitch) + _pen.Size + DimensionPen.Gap + 6;
+        var bottom = Rows.Count == 0 ? 8 : FirstLine + ((Rows.Count - 1) * _pen.Pitch) + 8;
+        var right = WithNotes ? Math.Max(_callouts + 42, 30) : 8;
+        return (Math.Max(left, outsideRow + 6), Math.Max(right, outsideRow + 6), Math.Max(_o.DimensionSize + 22, outsideColumn + 6), bottom);
+    }
+}
