@@ -21,7 +21,7 @@ internal static class JsonShape
 
     private static void Walk(JsonElement element, JsonTypeInfo type, string path, List<FieldError> errors)
     {
-        if (type.Type == typeof(JsonElement)) return;
+        if ((Nullable.GetUnderlyingType(type.Type) ?? type.Type) == typeof(JsonElement)) return;
         if (element.ValueKind == JsonValueKind.Null)
         {
             // A null member counts as left out; the root and the entries of a list must be there.
@@ -42,6 +42,19 @@ internal static class JsonShape
                 var index = 0;
                 foreach (var entry in element.EnumerateArray())
                     Walk(entry, entryType, string.Create(CultureInfo.InvariantCulture, $"{path}[{index++}]"), errors);
+                break;
+            case JsonTypeInfoKind.Dictionary when element.ValueKind == JsonValueKind.Object:
+                var names = new HashSet<string>(StringComparer.Ordinal);
+                foreach (var member in element.EnumerateObject())
+                {
+                    var memberPath = path.Length == 0 ? member.Name : $"{path}.{member.Name}";
+                    if (!names.Add(member.Name)) errors.Add(new FieldError(memberPath, $"'{Cut(member.Name)}' is given twice. Give it once."));
+                    Walk(member.Value, type.Options.GetTypeInfo(type.ElementType!), memberPath, errors);
+                }
+
+                break;
+            case JsonTypeInfoKind.Dictionary:
+                Add($"{Shown(element)} is given where an object of named entries is needed.");
                 break;
             case JsonTypeInfoKind.Enumerable:
                 Add($"{Shown(element)} is given where a list in square brackets is needed.");

@@ -1,0 +1,129 @@
+namespace CoreDesign.Magnetics.Circuits;
+
+/// <summary>MMF drop of one branch in time: its law, and the memory of its hysteresis stops at the last accepted instant.</summary>
+internal sealed class BranchState
+{
+    private readonly CircuitBranch _branch;
+    private readonly double[] _threshold;
+    private readonly double[] _weight;
+    private readonly double[] _memory;
+    private double _lastB;
+
+    public BranchState(CircuitBranch branch)
+    {
+        _branch = branch;
+        var stops = branch.Steel?.Stops ?? [];
+        _threshold = [.. stops.Select(s => s.Threshold_T)];
+        _weight = [.. stops.Select(s => s.Weight_A_per_m_T)];
+        _memory = new double[stops.Length];
+    }
+
+    /// <summary>Energy that the stops have turned into heat since <see cref="ResetHeat"/>, J/m3.</summary>
+    public double Heat_J_per_m3 { get; private set; }
+
+    public bool HasStops => _threshold.Length > 0;
+
+    /// <summary>MMF of the memory-free, rate-free part at flux <paramref name="flux"/>, and its slope.</summary>
+    public double StaticMmf(double flux, out double slope)
+    {
+        var b = flux / _branch.Area_m2;
+        var mmf = flux * _branch.Reluctance_A_per_Wb;
+        slope = _branch.Reluctance_A_per_Wb;
+        if (_branch.Steel is { } steel)
+        {
+            mmf += _branch.Length_m * steel.Spine.Value(b, out var dh);
+            slope += _branch.Length_m * dh / _branch.Area_m2;
+        }
+
+        if (_branch.Mmf is { } curve)
+        {
+            mmf += curve.Value(b, out var df);
+            slope += df / _branch.Area_m2;
+        }
+
+        return mmf;
+    }
+
+    /// <summary>MMF of the stops if the flux went to <paramref name="flux"/> from the last accepted instant; nothing is remembered.</summary>
+    public double StopMmf(double flux, out double slope)
+    {
+        double h = 0, dh = 0, step = (flux / _branch.Area_m2) - _lastB;
+        for (var i = 0; i < _threshold.Length; i++)
+        {
+            var x = _memory[i] + step;
+            var r = _threshold[i];
+            if (x > r)
+            {
+                x = r;
+            }
+            else if (x < -r)
+            {
+                x = -r;
+            }
+            else
+            {
+                dh += _weight[i];
+            }
+
+            h += _weight[i] * x;
+        }
+
+        slope = dh * _branch.Length_m / _branch.Area_m2;
+        return h * _branch.Length_m;
+    }
+
+    /// <summary>MMF of classical, excess and extra-loss terms at flux rate <paramref name="rate"/> (Wb/s).</summary>
+    public double RateMmf(double rate, out double slope)
+    {
+        var mmf = _branch.ExtraLoss_A_s_per_Wb * rate;
+        slope = _branch.ExtraLoss_A_s_per_Wb;
+        if (_branch.Steel is { HasRate: true } steel)
+        {
+            mmf += _branch.Length_m * steel.RateField(rate / _branch.Area_m2, out var dh);
+            slope += _branch.Length_m * dh / _branch.Area_m2;
+        }
+
+        return mmf;
+    }
+
+    /// <summary>Accepts the flux of this instant: moves the stops, counts their heat and returns their MMF.</summary>
+    public double Accept(double flux)
+    {
+        var b = flux / _branch.Area_m2;
+        var step = b - _lastB;
+        var h = 0.0;
+        for (var i = 0; i < _threshold.Length; i++)
+        {
+            var x = _memory[i] + step;
+            var r = _threshold[i];
+            if (x > r)
+            {
+                Heat_J_per_m3 += _weight[i] * r * (x - r);
+                x = r;
+            }
+            else if (x < -r)
+            {
+                Heat_J_per_m3 += _weight[i] * r * (-r - x);
+                x = -r;
+            }
+
+            _memory[i] = x;
+            h += _weight[i] * x;
+        }
+
+        _lastB = b;
+        return h * _branch.Length_m;
+    }
+
+    /// <summary>Turns the memory over, as half-wave symmetry does from one half period to the next.</summary>
+    public void Reverse()
+    {
+        _lastB = -_lastB;
+        for (var i = 0; i < _memory.Length; i++)
+        {
+            _memory[i] = -_memory[i];
+        }
+    }
+
+    public void ResetHeat() => Heat_J_per_m3 = 0;
+}
