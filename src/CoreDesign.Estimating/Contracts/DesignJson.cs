@@ -14,7 +14,10 @@ public static class DesignJson
 {
     public const int MaxDepth = 32;
 
-    public static JsonSerializerOptions Options { get; } = Frozen();
+    public static JsonSerializerOptions Options { get; } = Frozen(JsonUnmappedMemberHandling.Disallow);
+
+    // A member that a later contract gave up must not make an old revision unreadable.
+    private static readonly JsonSerializerOptions StoredOptions = Frozen(JsonUnmappedMemberHandling.Skip);
 
     /// <summary>Sets the rules on options that someone else owns, those of the web server for one.</summary>
     public static void Configure(JsonSerializerOptions options)
@@ -36,7 +39,7 @@ public static class DesignJson
     /// <summary>Reads what <see cref="Write"/> wrote. For text from outside use <see cref="Read{T}(ReadOnlyMemory{byte})"/>.</summary>
     public static T ReadStored<T>(string json)
         where T : class =>
-        JsonSerializer.Deserialize<T>(json, Options) ?? throw new JsonException($"The stored {typeof(T).Name} is empty.");
+        JsonSerializer.Deserialize<T>(json, StoredOptions) ?? throw new JsonException($"The stored {typeof(T).Name} is empty.");
 
     public static Outcome<T> Read<T>(string json)
         where T : class =>
@@ -73,10 +76,11 @@ public static class DesignJson
         where T : class =>
         new() { Errors = [new FieldError(path, message)] };
 
-    private static JsonSerializerOptions Frozen()
+    private static JsonSerializerOptions Frozen(JsonUnmappedMemberHandling unknownMembers)
     {
         var options = new JsonSerializerOptions();
         Configure(options);
+        options.UnmappedMemberHandling = unknownMembers;
         options.MakeReadOnly(populateMissingResolver: true);
         return options;
     }
