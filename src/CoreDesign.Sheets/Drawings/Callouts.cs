@@ -14,23 +14,35 @@ internal static class Callouts
     public static IEnumerable<Mark> Place(IEnumerable<Callout> callouts, double x, double top, double bottom, DrawingOptions o, IReadOnlyList<Box> taken)
     {
         var line = o.TextSize + 3;
-        var free = top;
-        foreach (var callout in callouts.OrderBy(c => c.Target.Y))
-        {
-            var height = (callout.Lines.Count * line) + 4;
-            var y = Math.Max(callout.Target.Y - line, free);
-            if (y + height > bottom)
-            {
-                y = bottom - height;
-            }
+        var sorted = callouts.OrderBy(c => c.Target.Y).ToList();
+        double Height(Callout c) => (c.Lines.Count * line) + 4;
 
+        // Down from the top, each at its target or under the one before; then up again from the foot, so that all find room.
+        while (sorted.Sum(Height) > bottom - top && sorted.Count > 0)
+        {
+            sorted.RemoveAt(sorted.Count - 1);
+        }
+
+        var ys = new double[sorted.Count];
+        for (var i = 0; i < ys.Length; i++)
+        {
+            ys[i] = Math.Max(sorted[i].Target.Y - line, i == 0 ? top : ys[i - 1] + Height(sorted[i - 1]));
+        }
+
+        for (var i = ys.Length - 1; i >= 0; i--)
+        {
+            ys[i] = Math.Min(ys[i], (i == ys.Length - 1 ? bottom : ys[i + 1]) - Height(sorted[i]));
+        }
+
+        for (var n = 0; n < ys.Length; n++)
+        {
+            var (callout, y) = (sorted[n], ys[n]);
             var knee = new XY(x - 10, y + (o.TextSize * 0.5));
-            if (y < free || taken.Any(b => b.Meets(callout.Target, knee)))
+            if (taken.Any(b => b.Meets(callout.Target, knee)))
             {
                 continue;
             }
 
-            free = y + height;
             var marks = new List<Mark> { new PathMark([callout.Target, knee, new(x - 4, knee.Y)], false, Paint.None, Ink.Ink3, 0.75) };
             if (callout.Dot)
             {

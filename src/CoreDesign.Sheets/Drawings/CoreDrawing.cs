@@ -16,6 +16,38 @@ public static class CoreDrawing
         return new Scene(o.Width, o.Height, $"{FormName(r)} core, front view", Describe(r, reading), marks);
     }
 
+    /// <summary>Limb cross-section with circle, diameter and the table of steps beside it. <see cref="DrawingOptions.Scale"/> holds for the circle.</summary>
+    public static Scene Section(EstimateResult r, Reading reading, DrawingOptions o)
+    {
+        ArgumentNullException.ThrowIfNull(r);
+        ArgumentNullException.ThrowIfNull(o);
+        var g = r.Geometry;
+        var steps = string.Join("; ", g.LimbSteps.Select(s => $"{Figures.Plain(s.Width_mm, 1)} by {Figures.Fixed(s.Stack_mm, 1)}"));
+        var count = g.LimbSteps.Count == 1 ? "1 step" : g.LimbSteps.Count.ToString(CultureInfo.InvariantCulture) + " steps";
+        return new Scene(o.Width, o.Height, "Limb section S–S", $"Circle of {Mm(g.CircleDiameter_mm)}, {count}, width by stack in mm: {steps}.", new SectionView(r, reading, o.Checked()).Draw());
+    }
+
+    /// <summary>The book of sheets at a joint, each position drawn, gap and overlap dimensioned; thickness not to scale.</summary>
+    public static Scene JointDetail(EstimateResult r, DrawingOptions o)
+    {
+        ArgumentNullException.ThrowIfNull(r);
+        ArgumentNullException.ThrowIfNull(o);
+        var joint = r.Inputs.Joint;
+        var text = $"{JointView.Name(r.Joint.Type)} joint, {r.Joint.Positions.ToString(CultureInfo.InvariantCulture)} positions in a book, {r.Joint.SheetsPerPosition.ToString(CultureInfo.InvariantCulture)} sheets for each position"
+            + (joint?.Gap_mm is { } gap ? $", gap {Mm(gap)}" : "") + (joint?.Overlap_mm is { } overlap ? $", overlap {Mm(overlap)}" : "") + ".";
+        return new Scene(o.Width, o.Height, "Joint detail Z", char.ToUpperInvariant(text[0]) + text[1..], new JointView(r, o.Checked()).Draw());
+    }
+
+    /// <summary>Legend of the ramp; 232 by 36 does for a page.</summary>
+    public static Scene ReadingScale(EstimateResult r, Reading reading, double width = 232, double textSize = 11)
+    {
+        ArgumentNullException.ThrowIfNull(r);
+        ArgumentOutOfRangeException.ThrowIfLessThan(width, 120);
+        var o = new DrawingOptions { Width = width, Height = 80, TextSize = textSize }.Checked();
+        var ticks = Readings.Span(r, reading).Ticks;
+        return new Scene(width, textSize + 27, "Scale of the reading", $"{Readings.Name(reading)} from {ticks.Label(ticks.Low)} to {Figures.With(ticks.Label(ticks.High), Readings.Unit(reading))}; darker is nearer the limit.", ScaleView.Draw(r, reading, o));
+    }
+
     internal static string FormName(EstimateResult r) => CoreZones.Limbs(r.Geometry) switch
     {
         2 => "Two-limb",

@@ -116,7 +116,10 @@ internal sealed class FrontPlan
             InsideHeight = windowHeight;
         }
 
-        Stack(Rows, [limbWidth, .. InsideWidth is null ? new[] { windowWidth } : [], pitch, overallWidth], d => (d.To_mm - d.From_mm) * s);
+        // Of two limbs both centre lines carry the pitch; its extension lines must not run through the text of the limb's width.
+        DimensionText[] window = InsideWidth is null ? [windowWidth] : [];
+        DimensionText[] row = Windows == 1 && _pen.Fits(limbWidth, w * s) ? [pitch, limbWidth, .. window, overallWidth] : [limbWidth, .. window, pitch, overallWidth];
+        Stack(Rows, row, d => (d.To_mm - d.From_mm) * s);
         Stack(Columns, [yokeHeight, .. InsideHeight is null ? new[] { windowHeight } : [], overallHeight], d => (d.To_mm - d.From_mm) * s);
     }
 
@@ -141,7 +144,7 @@ internal sealed class FrontPlan
     {
         if (!WithDimensions && !WithNotes)
         {
-            return (3, 3, _o.TextSize + 8, 3);
+            return (3, 3, _o.DimensionSize + 14, 3);
         }
 
         var outsideRow = Rows.SelectMany(r => r).Where(d => !_pen.Fits(d, (d.To_mm - d.From_mm) * Scale)).Select(d => _pen.Width(d) + DimensionPen.Tail + 8).DefaultIfEmpty(0).Max();

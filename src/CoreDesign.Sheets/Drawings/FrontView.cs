@@ -41,7 +41,7 @@ internal sealed class FrontView
             var bottom = ScaleBar();
             Cut();
             DetailCircle();
-            _marks.AddRange(Callouts.Place(_callouts, _plan.CalloutX, _o.TextSize, bottom, _o, _taken));
+            _marks.AddRange(Callouts.Place(_callouts, _plan.CalloutX, 4, bottom, _o, _taken));
         }
 
         return _marks;
@@ -142,8 +142,7 @@ internal sealed class FrontView
             foreach (var d in _plan.Rows[row])
             {
                 double x1 = _plan.X(d.From_mm), x2 = _plan.X(d.To_mm);
-                double? outside = _pen.Fits(d, x2 - x1) ? null : d.From_mm == 0 && d.To_mm < _r.Geometry.OverallWidth_mm ? _plan.Core.X - DimensionPen.Tail : Math.Max(_plan.Core.Right, x2) + DimensionPen.Tail;
-                Add(_pen.Horizontal(d, x1, x2, _plan.RowY(row), _plan.Core.Bottom, outside));
+                Add(_pen.Horizontal(d, x1, x2, _plan.RowY(row), _plan.Core.Bottom, _pen.Fits(d, x2 - x1) ? null : Outside(d, row)));
             }
         }
 
@@ -157,11 +156,25 @@ internal sealed class FrontView
         }
     }
 
+    // Close by, unless an extension line of a row further out runs through there; then beyond the core.
+    private double Outside(DimensionText d, int row)
+    {
+        if (d.From_mm == 0 && d.To_mm < _r.Geometry.OverallWidth_mm)
+        {
+            return _plan.Core.X - DimensionPen.Tail;
+        }
+
+        double near = _plan.X(d.To_mm) + DimensionPen.Tail, end = near + _pen.Width(d);
+        var lines = _plan.Rows.Skip(row + 1).SelectMany(r => r).SelectMany(o => new[] { _plan.X(o.From_mm), _plan.X(o.To_mm) });
+        return lines.All(x => x < near - 3 || x > end + 3) ? near : Math.Max(_plan.Core.Right + DimensionPen.Tail, near);
+    }
+
     /// <summary>Where the notes must end above it.</summary>
     private double ScaleBar()
     {
-        var length = NiceTicks.NiceStep(34 / _plan.Scale);
-        double x = _plan.CalloutX - 14, y = _plan.Core.Bottom - 8, half = length * _plan.Scale;
+        double x = _plan.CalloutX - 14, y = _plan.Core.Bottom - 8;
+        var length = new[] { 34.0, 26, 20 }.Select(px => NiceTicks.NiceStep(px / _plan.Scale)).First(l => l * _plan.Scale <= 45 || l == NiceTicks.NiceStep(20 / _plan.Scale));
+        var half = length * _plan.Scale;
         var end = Figures.With(Figures.Plain(2 * length, 6), "mm");
         var marks = new List<Mark>
         {
@@ -223,8 +236,8 @@ internal sealed class FrontView
         var corner = _plan.Place(_zones.Last(z => z.Kind == ZoneKind.Corner && z.Top).Place_mm);
         var reach = Math.Min(corner.Width, corner.Height);
         var at = _joints.Mitred ? new XY(corner.X + (0.72 * reach), corner.Bottom - (0.72 * reach)) : new XY(corner.X + (0.82 * corner.Width), corner.Bottom);
-        var radius = Math.Min(15, 0.25 * reach);
-        while (radius >= 4 && !IsFree(new Box(at.X - radius, at.Y - radius, 2 * radius, 2 * radius)))
+        var radius = Math.Clamp(0.25 * reach, 5, 15);
+        while (radius >= 4 && !IsFree(new Box(at.X - radius, at.Y - radius, 2 * radius, 2 * radius).Grown(2)))
         {
             radius -= 1;
         }
@@ -234,7 +247,6 @@ internal sealed class FrontView
             return;
         }
 
-        _taken.Add(new Box(at.X - radius, at.Y - radius, 2 * radius, 2 * radius));
         _marks.Add(new CircleMark(at, radius, Paint.None, _o.Pressable ? Ink.Accent : Ink.Black, 1.25) { Part = "zc", Label = "Detail Z, the joint" });
         _callouts.Add(new(JointNote(), new XY(at.X + (radius * 0.95), at.Y - (radius * 0.3)), Dot: false));
     }
