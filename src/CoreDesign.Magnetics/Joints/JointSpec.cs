@@ -30,6 +30,7 @@ public sealed record JointSpec
 
 /// <summary>
 /// MMF drop of one joint zone, in excess of the plain steel path, against the mean flux density of the limb's steel.
+/// Peak values; both columns rise (a gap of zero has no drop at all).
 /// <paramref name="BridgingFluxDensity_T"/>: highest in a bridging sheet, component normal to the joint line.
 /// </summary>
 public sealed record JointTable(
