@@ -7,10 +7,10 @@ namespace CoreDesign.Magnetics.Joints;
 public sealed record JointGrid
 {
     /// <summary>Cell at the edge of a gap, m.</summary>
-    public double FinestCell_m { get; init; } = 40e-6;
+    public double FinestCell_m { get; init; } = 25e-6;
 
     /// <summary>Ratio of a cell to its finer neighbour.</summary>
-    public double Growth { get; init; } = 1.5;
+    public double Growth { get; init; } = 1.35;
 
     /// <summary>Cells between two neighbouring gaps are at most this part of the distance between positions.</summary>
     public double LargestCellOfShift { get; init; } = 0.125;

@@ -16,7 +16,7 @@ public static class JointSolver
     /// <summary>Solves one joint for mean flux densities from 0.05 T to well past saturation (Js + 0.5 T).</summary>
     /// <param name="spec">2 to 12 positions (2 for the lapped kinds), 1 to 4 sheets per position, gap 0 to 5 mm, shift above 0 to 30 mm, interface 1 to 60 µm.</param>
     /// <param name="steel">Steel of the sheets.</param>
-    /// <param name="grid">Fineness of the lattice; with the default the drop is up to 1.5 % below that of a much finer one.</param>
+    /// <param name="grid">Fineness of the lattice; with the default the drop is up to 1 % below that of a much finer one.</param>
     /// <returns>
     /// The drop in excess of the plain steel path, rising strictly. Past its own knee the plain limb's drop may rise faster than the
     /// joint's, and the excess level off or fall: levels that do not rise above all before them are left out, so a table may
