@@ -15,7 +15,7 @@ public sealed class DerivedTexts
     public static DerivedTexts From(EstimateResult estimate)
     {
         var derived = new DerivedTexts();
-        foreach (var (path, value) in DesignJson.Flatten(estimate.Inputs))
+        foreach (var (path, value) in DesignPaths.Flatten(estimate.Inputs))
         {
             derived.texts[path] = value switch
             {

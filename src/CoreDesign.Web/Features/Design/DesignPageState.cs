@@ -79,9 +79,9 @@ public sealed class DesignPageState
     /// <summary>Tries a solved change: only what the lever changed is typed, what was open stays open.</summary>
     public void Try(LeverResult lever)
     {
-        var sent = DesignJson.Flatten(Request.Design);
-        var used = Estimate is null ? sent : DesignJson.Flatten(Estimate.Inputs);
-        Take(DesignJson.Flatten(lever.Design)
+        var sent = DesignPaths.Flatten(Request.Design);
+        var used = Estimate is null ? sent : DesignPaths.Flatten(Estimate.Inputs);
+        Take(DesignPaths.Flatten(lever.Design)
             .Where(v => !(sent.TryGetValue(v.Key, out var s) || used.TryGetValue(v.Key, out s)) || !Equals(s, v.Value))
             .Select(v => KeyValuePair.Create(v.Key, v.Value is double n ? NumberText.Exact(n) : (string)v.Value)));
     }

@@ -54,14 +54,14 @@ public static partial class FormReader
             values.Add(new(FormPaths.Phases, form.StartsWith("singlePhase", StringComparison.Ordinal) ? 1.0 : 3.0));
         }
 
-        return DesignJson.Build(values);
+        return DesignPaths.Build(values);
     }
 
     /// <summary>The texts of a stored design; what it left open stays open.</summary>
     public static DesignText Texts(DesignInput design)
     {
         var texts = DesignText.Empty;
-        foreach (var (path, value) in DesignJson.Flatten(design).Where(p => p.Key != FormPaths.Phases))
+        foreach (var (path, value) in DesignPaths.Flatten(design).Where(p => p.Key != FormPaths.Phases))
         {
             var list = ItemIndex().Replace(path, "");
             texts = value switch

@@ -1,27 +1,21 @@
 using System.Globalization;
 using System.Text.Json;
 using System.Text.Json.Nodes;
-using System.Text.Json.Serialization;
 using System.Text.RegularExpressions;
 using CoreDesign.Estimating.Contracts;
 
 namespace CoreDesign.Web.Features.Design;
 
 /// <summary>Between a design and its fields by JSON path; the contract's names are the form's names, so no field is mapped by hand.</summary>
-public static partial class DesignJson
+public static partial class DesignPaths
 {
-    private static readonly JsonSerializerOptions Options = new()
-    {
-        PropertyNamingPolicy = JsonNamingPolicy.CamelCase,
-        DefaultIgnoreCondition = JsonIgnoreCondition.WhenWritingNull,
-        NumberHandling = JsonNumberHandling.Strict,
-    };
+    private const int LongestList = 200;
 
     /// <summary>Every value of a design by its path, list items as <c>core.limbSteps[0].width_mm</c>; numbers as double, the rest as string.</summary>
     public static IReadOnlyDictionary<string, object> Flatten(DesignInput design)
     {
         var values = new Dictionary<string, object>(StringComparer.Ordinal);
-        Walk(JsonSerializer.SerializeToNode(design, Options), "", values);
+        Walk(JsonSerializer.SerializeToNode(design, DesignJson.Options), "", values);
         return values;
     }
 
@@ -34,7 +28,7 @@ public static partial class DesignJson
             Put(root, Step().Matches(path).Select(m => m.Value).ToList(), Leaf(path, value));
         }
 
-        return root.Deserialize<DesignInput>(Options) ?? new();
+        return root.Deserialize<DesignInput>(DesignJson.Options) ?? new();
     }
 
     private static JsonValue Leaf(string path, object value) => value switch
@@ -80,6 +74,11 @@ public static partial class DesignJson
             if (at is JsonArray list)
             {
                 var index = int.Parse(steps[i].Trim('[', ']'), CultureInfo.InvariantCulture);
+                if (index >= LongestList)
+                {
+                    throw new FormatException($"A list of the form has at most {LongestList} items.");
+                }
+
                 while (list.Count <= index)
                 {
                     list.Add(null);
