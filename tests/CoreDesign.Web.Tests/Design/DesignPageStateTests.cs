@@ -42,10 +42,10 @@ public sealed class DesignPageStateTests
     public void Late_answer_is_dropped()
     {
         var state = Solved();
-        var old = state.Serial;
+        var old = state.Begin();
         state.Type("joint.gap_mm", "0.4");
 
-        Assert.False(state.Accept(old, state.Typed, Samples.Ok(Samples.Estimate with { NoLoadLoss_W = 1 })));
+        Assert.False(state.Accept(old, Samples.Input, Samples.Ok(Samples.Estimate with { NoLoadLoss_W = 1 })));
         Assert.NotEqual(1, state.Estimate!.NoLoadLoss_W);
     }
 
@@ -79,7 +79,7 @@ public sealed class DesignPageStateTests
     {
         var state = Solved();
         state.Type(FormPaths.WindowHeight, "3000");
-        state.Accept(state.Serial, state.Standing, new Outcome<EstimateResult> { Errors = [new(FormPaths.WindowHeight, "Too tall."), new("core.limb", "No steps fit.")] });
+        state.Accept(state.Begin(), Samples.Input, new Outcome<EstimateResult> { Errors = [new(FormPaths.WindowHeight, "Too tall."), new("core.limb", "No steps fit.")] });
 
         Assert.Equal("Too tall. The figures still stand for 520 mm.", state.Messages[FormPaths.WindowHeight]);
         Assert.StartsWith("No steps fit.", state.Messages[FormPaths.Diameter], StringComparison.Ordinal);
@@ -89,7 +89,7 @@ public sealed class DesignPageStateTests
     public void Empty_form_lists_what_is_needed_and_calls_nothing_wrong()
     {
         var state = new DesignPageState();
-        state.Accept(state.Serial, state.Standing, new Outcome<EstimateResult> { Errors = [new(FormPaths.LineVoltage, "Missing."), new(FormPaths.Grade, "Missing.")] });
+        state.Accept(state.Begin(), Samples.Input, new Outcome<EstimateResult> { Errors = [new(FormPaths.LineVoltage, "Missing."), new(FormPaths.Grade, "Missing.")] });
 
         Assert.Empty(state.Messages.Paths);
         Assert.Equal(["Line voltage", "Grade"], state.Messages.Needed.Select(f => f.Label));
@@ -175,7 +175,7 @@ public sealed class DesignPageStateTests
     {
         var state = new DesignPageState();
         state.Load(FormReader.Texts(Samples.Input));
-        Assert.True(state.Accept(state.Serial, state.Standing, Samples.Ok(Samples.Estimate)));
+        Assert.True(state.Accept(state.Begin(), Samples.Input, Samples.Ok(Samples.Estimate)));
         return state;
     }
 }

@@ -27,10 +27,18 @@ public sealed class DesignPageState
     /// <summary>Grows with every edit; an answer to an older one is dropped.</summary>
     public long Serial { get; private set; }
 
+    /// <summary>The edit that was answered last.</summary>
+    public long Answered { get; private set; }
+
     public bool CanUndo => undo.CanUndo;
     public bool CanRedo => undo.CanRedo;
 
+    /// <summary>The design that <see cref="Estimate"/> was solved for, turns and yoke filled in.</summary>
+    public DesignInput SolvedDesign { get; private set; } = new();
+
     public DesignRequest Request => DesignRequest.From(reading);
+
+    public Solving Begin() => new(Serial, reading.Standing, Request);
 
     /// <summary>True where a typed text is not what the figures stand for.</summary>
     public bool FiguresAreOld => Estimate is not null && (reading.Errors.Count > 0 || refused.Count > 0 || Unsolvable is not null);
@@ -42,6 +50,10 @@ public sealed class DesignPageState
     {
         undo.Clear();
         touched.Clear();
+        refused = [];
+        Unsolvable = null;
+        Estimate = null;
+        Derived = DerivedTexts.None;
         Set(texts);
     }
 
@@ -90,32 +102,29 @@ public sealed class DesignPageState
 
     public void Redo() => Set(undo.Redo(Typed));
 
-    /// <summary>Takes the answer to edit <paramref name="serial"/>; false where it came too late.</summary>
-    public bool Accept(long serial, DesignText solvedFor, Outcome<EstimateResult> outcome)
+    /// <summary>Takes the answer to an edit; false where it came too late.</summary>
+    public bool Accept(Solving solving, DesignInput design, Outcome<EstimateResult> outcome)
     {
-        if (serial != Serial)
+        if (solving.Serial != Serial)
         {
             return false;
         }
 
+        Answered = solving.Serial;
         refused = outcome.Errors;
         Unsolvable = outcome.Unsolvable;
         if (outcome.Value is { } estimate)
         {
-            Estimate = estimate;
-            Derived = DerivedTexts.From(estimate);
-            Solved = solvedFor;
-            Levers = null;
-            VoltageCurve = null;
+            Show(solving.Texts, design, estimate);
         }
 
         return true;
     }
 
-    /// <summary>Takes levers and curve of edit <paramref name="serial"/>; false where they came too late.</summary>
-    public bool Accept(long serial, IReadOnlyList<LeverResult> levers, IReadOnlyList<VoltagePointResult> curve)
+    /// <summary>Takes levers and curve of an edit; false where they came too late.</summary>
+    public bool Accept(Solving solving, IReadOnlyList<LeverResult> levers, IReadOnlyList<VoltagePointResult> curve)
     {
-        if (serial != Serial)
+        if (solving.Serial != Serial)
         {
             return false;
         }
@@ -125,10 +134,31 @@ public sealed class DesignPageState
         return true;
     }
 
+    /// <summary>Opens a stored revision with its figures as they were saved; nothing is solved.</summary>
+    public void Load(DesignInput design, Study study)
+    {
+        Load(FormReader.Texts(design));
+        Show(Typed, design, study.Estimate);
+        Levers = study.Levers;
+        VoltageCurve = study.VoltageCurve;
+        Answered = Serial;
+    }
+
+    /// <summary>The texts that are asked for now: as typed, with the value before in the place of one that is no valid value.</summary>
     public DesignText Standing => reading.Standing;
 
     /// <summary>Messages by field; a field that was left open is not called wrong before it was visited.</summary>
     public FieldMessages Messages => new(Typed, reading, refused, touched, Estimate is null ? null : Solved, Derived);
+
+    private void Show(DesignText texts, DesignInput design, EstimateResult estimate)
+    {
+        Estimate = estimate;
+        SolvedDesign = design;
+        Derived = DerivedTexts.From(estimate);
+        Solved = texts;
+        Levers = null;
+        VoltageCurve = null;
+    }
 
     private void Step(DesignText texts)
     {

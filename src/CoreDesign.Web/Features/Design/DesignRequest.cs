@@ -10,3 +10,6 @@ public sealed record DesignRequest(DesignInput Design, double? YokeHeight_mm, do
 
     private static double? Number(string text) => NumberText.TryRead(text, out var value, out _) ? value : null;
 }
+
+/// <summary>An edit that is being answered.</summary>
+public sealed record Solving(long Serial, DesignText Texts, DesignRequest Request);
