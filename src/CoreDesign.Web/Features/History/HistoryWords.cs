@@ -1,0 +1,37 @@
+using System.Globalization;
+using CoreDesign.History.Designs;
+
+namespace CoreDesign.Web.Features.History;
+
+/// <summary>How the history says what is stored in keys.</summary>
+public static class HistoryWords
+{
+    public static string Joint(string type) => type switch
+    {
+        "buttLap" => "butt-lap",
+        "mitredOverlap" => "mitred overlap",
+        "stepLap" => "step-lap",
+        _ => type,
+    };
+
+    /// <summary>Kind and joint positions, "step-lap 5"; a butt-lap joint has no number worth telling.</summary>
+    public static string Joint(RevisionInfo row) => row.JointType switch
+    {
+        "stepLap" => string.Create(CultureInfo.InvariantCulture, $"step-lap {row.JointPositions}"),
+        var type => Joint(type),
+    };
+
+    public static string Form(string form) => form switch
+    {
+        "threeLimb" => "three-phase, three limbs",
+        "singlePhaseTwoLimb" => "single-phase, two limbs",
+        _ => form,
+    };
+
+    public static string Date(DateTime utc) => utc.ToString("yyyy-MM-dd", CultureInfo.InvariantCulture);
+
+    public static string Time(DateTime utc) => utc.ToString("HH:mm", CultureInfo.InvariantCulture);
+
+    /// <summary>Whether a limit was asked for and is exceeded.</summary>
+    public static bool Over(double figure, double? asked) => asked is { } limit && figure > limit;
+}
