@@ -104,7 +104,7 @@ internal sealed class SectionView(EstimateResult r, Reading reading, DrawingOpti
 
     private double TableHeight() => (2 * Row) + 4 + (r.Geometry.LimbSteps.Count * Row);
 
-    private string Title => "S\u2013S limb section";
+    private const string Title = "S\u2013S limb section";
 
     private void Table(double x, double room)
     {
