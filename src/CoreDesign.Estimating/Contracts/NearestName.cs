@@ -1,3 +1,5 @@
+using CoreDesign.Estimating.Steels;
+
 namespace CoreDesign.Estimating.Contracts;
 
 /// <summary>Finds the known names that a mistyped one most likely stood for.</summary>
@@ -16,26 +18,10 @@ public static class NearestName
         if (name.Length > LongestCompared) return [];
         var reach = Math.Max(2, name.Length / 3);
         return [.. known
-            .Select(k => (Name: k, Distance: Distance(name.ToLowerInvariant(), k.ToLowerInvariant())))
+            .Select(k => (Name: k, Distance: NameDistance.Edits(name, k)))
             .Where(k => k.Distance <= reach)
             .OrderBy(k => k.Distance).ThenBy(k => k.Name, StringComparer.Ordinal)
             .Take(count)
             .Select(k => k.Name)];
-    }
-
-    // Edit distance by the usual two-row table: insert, delete and replace cost one each.
-    private static int Distance(string a, string b)
-    {
-        var above = Enumerable.Range(0, b.Length + 1).ToArray();
-        for (var i = 1; i <= a.Length; i++)
-        {
-            var row = new int[b.Length + 1];
-            row[0] = i;
-            for (var j = 1; j <= b.Length; j++)
-                row[j] = Math.Min(Math.Min(row[j - 1], above[j]) + 1, above[j - 1] + (a[i - 1] == b[j - 1] ? 0 : 1));
-            above = row;
-        }
-
-        return above[b.Length];
     }
 }

@@ -14,7 +14,8 @@ internal static class NameDistance
             .Take(count)
             .Select(k => k.Name)];
 
-    private static int Edits(string from, string to)
+    /// <summary>Single-letter inserts, deletes and replacements that turn one name into the other.</summary>
+    public static int Edits(string from, string to)
     {
         var a = from.Trim().ToUpperInvariant();
         a = a.Length > LongestCompared ? a[..LongestCompared] : a;
