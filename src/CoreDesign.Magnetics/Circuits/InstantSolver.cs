@@ -66,7 +66,7 @@ internal sealed class InstantSolver
 
     /// <summary>
     /// Solves instant <paramref name="t"/>; <paramref name="z"/> holds the guess and gets the answer. Rate = weights[0]·flux + sum of
-    /// weights[i]·history[i-1]; null weights leave rates, memory and resistance out (first guess).
+    /// weights[i]·history[i-1]; null weights leave rates and resistance out (first guess, from the demagnetised state).
     /// </summary>
     public void Solve(double[] z, int t, double[]? rateWeights, double[][]? history)
     {
@@ -142,12 +142,13 @@ internal sealed class InstantSolver
         for (var b = 0; b < _states.Length; b++)
         {
             var flux = BranchFlux(b, z);
-            _mmf[b] = _states[b].StaticMmf(flux, out _slope[b]);
+            _mmf[b] = _states[b].StaticMmf(flux, out _slope[b]) + _states[b].StopMmf(flux, out var dStop);
+            _slope[b] += dStop;
             if (w is not null && history is not null)
             {
                 var rate = (w[0] * flux) + (w[1] * BranchFlux(b, history[0])) + (w[2] * BranchFlux(b, history[1])) + (w[3] * BranchFlux(b, history[2]));
-                _mmf[b] += _states[b].RateMmf(rate, out var dRate) + _states[b].StopMmf(flux, out var dStop);
-                _slope[b] += (dRate * w[0]) + dStop;
+                _mmf[b] += _states[b].RateMmf(rate, out var dRate);
+                _slope[b] += dRate * w[0];
             }
         }
 

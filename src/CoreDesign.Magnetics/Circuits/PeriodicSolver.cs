@@ -39,7 +39,7 @@ internal sealed class PeriodicSolver
         return solver.Finish(topology);
     }
 
-    /// <summary>Single-valued solution without rates or memory as the first guess.</summary>
+    /// <summary>First guess: every instant on the virgin curve, without rates.</summary>
     private void Start(CancellationToken cancel)
     {
         var z = new double[_instant.Size];

@@ -16,8 +16,9 @@ public sealed class MonotoneCurve
     /// <param name="x">Strictly increasing, all above zero.</param>
     /// <param name="y">Increasing or level, none below zero, as many as <paramref name="x"/>.</param>
     /// <param name="endSlope">Slope beyond the last point.</param>
+    /// <param name="rising">False allows any finite y; the curve then turns only where the table turns.</param>
     /// <exception cref="ArgumentException">Too few points, not finite, or not increasing.</exception>
-    public MonotoneCurve(IReadOnlyList<double> x, IReadOnlyList<double> y, double endSlope)
+    public MonotoneCurve(IReadOnlyList<double> x, IReadOnlyList<double> y, double endSlope, bool rising = true)
     {
         ArgumentNullException.ThrowIfNull(x);
         ArgumentNullException.ThrowIfNull(y);
@@ -29,7 +30,7 @@ public sealed class MonotoneCurve
         var n = x.Count;
         for (var i = 0; i < n; i++)
         {
-            if (!double.IsFinite(x[i]) || !double.IsFinite(y[i]) || x[i] <= (i == 0 ? 0 : x[i - 1]) || y[i] < (i == 0 ? 0 : y[i - 1]))
+            if (!double.IsFinite(x[i]) || x[i] <= (i == 0 ? 0 : x[i - 1]) || !double.IsFinite(y[i]) || (rising && y[i] < (i == 0 ? 0 : y[i - 1])))
             {
                 throw new ArgumentException($"Point {i + 1} ({x[i]}, {y[i]}) breaks the rising order.", nameof(x));
             }
