@@ -7,7 +7,7 @@ public sealed record NiceTicks(double Low, double High, double Step, int Decimal
 
     public int Count => (int)Math.Round((High - Low) / Step);
 
-    public string Label(double value) => Figures.Fixed(value, Decimals);
+    public string Label(double value) => value == 0 ? "0" : Figures.Fixed(value, Decimals);
 
     /// <param name="low">Smallest value to show; finite.</param>
     /// <param name="high">Largest value to show; where it isn't above <paramref name="low"/> the axis opens around it.</param>

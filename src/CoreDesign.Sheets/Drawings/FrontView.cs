@@ -173,7 +173,13 @@ internal sealed class FrontView
     private double ScaleBar()
     {
         double x = _plan.CalloutX - 14, y = _plan.Core.Bottom - 8;
-        var length = new[] { 34.0, 26, 20 }.Select(px => NiceTicks.NiceStep(px / _plan.Scale)).First(l => l * _plan.Scale <= 45 || l == NiceTicks.NiceStep(20 / _plan.Scale));
+        var lengths = new[] { 34.0, 26, 20, 14 }.Select(px => NiceTicks.NiceStep(px / _plan.Scale)).ToArray();
+        var length = Array.Find(lengths, l => x + (2 * l * _plan.Scale) + TextExtent.Width("0000\u00A0mm", _o.TextSize) - 14 <= _o.Width);
+        if (length == 0)
+        {
+            return _plan.Core.Bottom;
+        }
+
         var half = length * _plan.Scale;
         var end = Figures.With(Figures.Plain(2 * length, 6), "mm");
         var marks = new List<Mark>
