@@ -37,7 +37,7 @@ internal sealed class JointLattice
     private readonly double[] _imbalance;
     private readonly double[] _step;
     private readonly double[] _trial;
-    private readonly BandCholesky _matrix;
+    private readonly LatticeMatrix _matrix;
     private readonly double[] _potential;
 
     public JointLattice(JointMesh mesh, SheetLaw law, double sheet_m, double exchange_m)
@@ -59,7 +59,7 @@ internal sealed class JointLattice
         // Potentials are kept for whole columns, the centre's second half being the mirror image of its first.
         _potential = new double[(_cells + 1) * _layers];
         _trial = new double[_potential.Length];
-        _matrix = new BandCholesky(unknowns, _layers);
+        _matrix = new LatticeMatrix(_cells, _layers, _transfer);
     }
 
     /// <summary>Solves for a mean flux density across the line, starting from the levels solved before.</summary>
@@ -118,7 +118,7 @@ internal sealed class JointLattice
                 return residual;
             }
 
-            Assemble();
+            _matrix.Fill(_stiffness);
             Array.Copy(_imbalance, _step, _step.Length);
             var drive = 0.0;
             if (!_matrix.Solve(_step) || !double.IsFinite(drive = Along()) || drive <= 0)
@@ -231,60 +231,6 @@ internal sealed class JointLattice
         }
 
         return double.IsFinite(worst) ? worst : double.PositiveInfinity;
-    }
-
-    private void Assemble()
-    {
-        _matrix.Clear();
-        var centre = _cells * _layers;
-        for (var i = 0; i < _cells; i++)
-        {
-            for (var l = 0; l < _layers; l++)
-            {
-                var e = (i * _layers) + l;
-                var k = _stiffness[e];
-                _matrix.Add(e, e, k);
-                if (i < _cells - 1 || l < _layers / 2)
-                {
-                    _matrix.Add(e + _layers, e + _layers, k);
-                    _matrix.Add(e + _layers, e, -k);
-                }
-                else if (l != _layers - 1 - l)
-                {
-                    var image = centre + _layers - 1 - l;
-                    _matrix.Add(image, image, k);
-                    _matrix.Add(image, e, k);
-                }
-            }
-
-            for (var l = 0; l < _layers; l++)
-            {
-                Couple((i * _layers) + l, (i * _layers) + ((l + 1) % _layers), _transfer[i]);
-            }
-        }
-
-        AssembleCentre(centre, _transfer[_cells]);
-    }
-
-    private void Couple(int a, int b, double permeance)
-    {
-        _matrix.Add(a, a, permeance);
-        _matrix.Add(b, b, permeance);
-        _matrix.Add(Math.Max(a, b), Math.Min(a, b), -permeance);
-    }
-
-    private void AssembleCentre(int centre, double permeance)
-    {
-        var half = _layers / 2;
-        for (var l = 0; l < half - 1; l++)
-        {
-            Couple(centre + l, centre + l + 1, permeance);
-        }
-
-        // The first layer's other neighbour is its own mirror image; so is the last one's, or the middle layer at zero.
-        _matrix.Add(centre, centre, 2 * permeance);
-        var last = centre + half - 1;
-        _matrix.Add(last, last, _layers % 2 == 0 ? 2 * permeance : permeance);
     }
 
     private static JointSolveException Failure(string what, double mean, double residual) =>

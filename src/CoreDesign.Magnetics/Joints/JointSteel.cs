@@ -23,8 +23,14 @@ public sealed class JointSteel
 
     private const double Mu0 = MagneticConstants.Mu0_H_per_m;
 
-    /// <summary>How far the curve's own polarization may fall or pass Js before the curve is refused.</summary>
-    private const double PolarizationTolerance_T = 5e-3;
+    /// <summary>How far the last point's polarization may pass Js before the curve is refused.</summary>
+    private const double SaturationTolerance_T = 5e-3;
+
+    /// <summary>
+    /// How far the interpolated polarization may fall before the curve is refused; within this it is held level. Few
+    /// points between 5 and 100 kA/m make a smooth H(B) rise faster than 1/mu0 in places although every point is sound.
+    /// </summary>
+    private const double FallTolerance_T = 20e-3;
     private readonly SheetLaw _square;
     private readonly SheetLaw _mitred;
 
@@ -46,7 +52,7 @@ public sealed class JointSteel
         SheetThickness_m = sheetThickness_m;
         SaturationPolarization_T = saturationPolarization_T;
         RotationStiffness_J_per_m3 = rotationStiffness_J_per_m3;
-        _square = SheetLaw.Tabulate(new RollingDirection(fieldOfFluxDensity, saturationPolarization_T, PolarizationTolerance_T).PolarizationAt);
+        _square = SheetLaw.Tabulate(new RollingDirection(fieldOfFluxDensity, saturationPolarization_T).PolarizationAt);
         _mitred = SheetLaw.Tabulate(new Turning(_square, saturationPolarization_T, rotationStiffness_J_per_m3).PolarizationAt);
         Fingerprint = Digest();
     }
@@ -103,16 +109,14 @@ public sealed class JointSteel
         private readonly double _saturation;
         private readonly double _lastPolarization;
         private readonly double _exponent;
-        private readonly double _tolerance;
         private double _flux;
         private double _highest;
 
-        public RollingDirection(MonotoneCurve curve, double saturation, double tolerance)
+        public RollingDirection(MonotoneCurve curve, double saturation)
         {
             _curve = curve;
-            _tolerance = tolerance;
             _lastPolarization = curve.LastX - (Mu0 * curve.LastY);
-            if (_lastPolarization <= 0 || _lastPolarization > saturation + tolerance)
+            if (_lastPolarization <= 0 || _lastPolarization > saturation + SaturationTolerance_T)
             {
                 throw new ArgumentException(
                     string.Create(CultureInfo.InvariantCulture, $"Magnetization curve: at its last point ({curve.LastX:g5} T, {curve.LastY:g5} A/m) the polarization is {_lastPolarization:g5} T; allowed is above 0 and up to the saturation polarization, {saturation:g4} T. Correct the last point or the saturation polarization."),
@@ -137,10 +141,9 @@ public sealed class JointSteel
             return Rising(_flux - (Mu0 * field), field);
         }
 
-        // Between two sound points an interpolated H(B) may rise a little faster than 1/mu0; a curve that does more is wrong.
         private double Rising(double polarization, double field)
         {
-            if (polarization < _highest - _tolerance)
+            if (polarization < _highest - FallTolerance_T)
             {
                 throw new ArgumentException(
                     string.Create(CultureInfo.InvariantCulture, $"Magnetization curve: the polarization B - mu0·H falls from {_highest:g5} T to {polarization:g5} T at {field:g4} A/m; it must never fall. Check the points near that field."),
