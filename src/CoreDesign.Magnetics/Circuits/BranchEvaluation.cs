@@ -8,47 +8,31 @@ internal sealed class BranchEvaluation(MagneticCircuit circuit, int points)
     private readonly double[] _excess = new double[circuit.Branches.Count];
     private readonly double[] _extra = new double[circuit.Branches.Count];
 
+    // Limb, corner and yoke of one phase often share one waveform: each distinct one is worked out once.
+    private readonly List<SteelWave> _waves = [];
+
     public double[][] Mmf_A { get; } = [.. circuit.Branches.Select(_ => new double[points])];
 
-    /// <summary>Evaluates branch <paramref name="index"/>; the memory is brought to its periodic state from the demagnetised one first.</summary>
     public void Run(int index, double[] flux, double[] rate)
     {
         var branch = circuit.Branches[index];
-        var state = new BranchState(branch);
         var mmf = Mmf_A[index];
-        if (state.HasStops)
-        {
-            // From zero, one period passes both extremes; what the stops do after that repeats.
-            for (var t = 0; t < points; t++)
-            {
-                state.Accept(flux[t]);
-            }
-
-            state.ResetHeat();
-            for (var t = 0; t < points; t++)
-            {
-                mmf[t] = state.Accept(flux[t]);
-            }
-        }
-
-        double classical = 0, excess = 0, extra = 0;
+        double area = branch.Area_m2, extra = 0;
         for (var t = 0; t < points; t++)
         {
-            mmf[t] += state.StaticMmf(flux[t], out _) + state.RateMmf(rate[t], out _);
+            mmf[t] = (flux[t] * branch.Reluctance_A_per_Wb) + (branch.ExtraLoss_A_s_per_Wb * rate[t]);
             extra += rate[t] * rate[t];
-            if (branch.Steel is { } steel)
+            if (branch.Mmf is { } curve)
             {
-                var s = rate[t] / branch.Area_m2;
-                classical += steel.Eddy_A_s_per_m_T * s * s;
-                excess += steel.ExcessField(s) * s;
+                mmf[t] += curve.Value(flux[t] / area);
             }
         }
 
-        var volume = branch.Area_m2 * branch.Length_m;
-        _hysteresis[index] = state.Heat_J_per_m3 * volume * circuit.Supply.Frequency_Hz;
-        _classical[index] = classical * volume / points;
-        _excess[index] = excess * volume / points;
         _extra[index] = branch.ExtraLoss_A_s_per_Wb * extra / points;
+        if (branch.Steel is not null)
+        {
+            AddSteel(index, flux, rate);
+        }
     }
 
     public CircuitSolution Solution(double[][] flux, double[][] rate, double[][] current, double[][] voltage)
@@ -78,5 +62,40 @@ internal sealed class BranchEvaluation(MagneticCircuit circuit, int points)
             CopperLoss_W = copper,
             TerminalPower_W = terminal,
         };
+    }
+
+    private void AddSteel(int index, double[] flux, double[] rate)
+    {
+        var branch = circuit.Branches[index];
+        var law = branch.Steel!;
+        var b = Array.ConvertAll(flux, f => f / branch.Area_m2);
+        SteelWave? wave = null;
+        var sign = 0;
+        foreach (var known in _waves)
+        {
+            sign = known.SignFor(law, b);
+            if (sign != 0)
+            {
+                wave = known;
+                break;
+            }
+        }
+
+        if (wave is null)
+        {
+            sign = 1;
+            wave = new SteelWave(law, b, Array.ConvertAll(rate, s => s / branch.Area_m2), circuit.Supply.Frequency_Hz);
+            _waves.Add(wave);
+        }
+
+        for (var t = 0; t < points; t++)
+        {
+            Mmf_A[index][t] += sign * branch.Length_m * wave.Field_A_per_m[t];
+        }
+
+        var volume = branch.Area_m2 * branch.Length_m;
+        _hysteresis[index] = wave.Hysteresis_W_per_m3 * volume;
+        _classical[index] = wave.Classical_W_per_m3 * volume;
+        _excess[index] = wave.Excess_W_per_m3 * volume;
     }
 }

@@ -18,11 +18,6 @@ internal sealed class BranchState
         _memory = new double[stops.Length];
     }
 
-    /// <summary>Energy that the stops have turned into heat since <see cref="ResetHeat"/>, J/m3.</summary>
-    public double Heat_J_per_m3 { get; private set; }
-
-    public bool HasStops => _threshold.Length > 0;
-
     /// <summary>MMF of the memory-free, rate-free part at flux <paramref name="flux"/>, and its slope.</summary>
     public double StaticMmf(double flux, out double slope)
     {
@@ -86,33 +81,17 @@ internal sealed class BranchState
         return mmf;
     }
 
-    /// <summary>Accepts the flux of this instant: moves the stops, counts their heat and returns their MMF.</summary>
-    public double Accept(double flux)
+    /// <summary>Accepts the flux of this instant: moves the stops.</summary>
+    public void Accept(double flux)
     {
         var b = flux / _branch.Area_m2;
         var step = b - _lastB;
-        var h = 0.0;
         for (var i = 0; i < _threshold.Length; i++)
         {
-            var x = _memory[i] + step;
-            var r = _threshold[i];
-            if (x > r)
-            {
-                Heat_J_per_m3 += _weight[i] * r * (x - r);
-                x = r;
-            }
-            else if (x < -r)
-            {
-                Heat_J_per_m3 += _weight[i] * r * (-r - x);
-                x = -r;
-            }
-
-            _memory[i] = x;
-            h += _weight[i] * x;
+            _memory[i] = Math.Clamp(_memory[i] + step, -_threshold[i], _threshold[i]);
         }
 
         _lastB = b;
-        return h * _branch.Length_m;
     }
 
     /// <summary>Turns the memory over, as half-wave symmetry does from one half period to the next.</summary>
@@ -124,6 +103,4 @@ internal sealed class BranchState
             _memory[i] = -_memory[i];
         }
     }
-
-    public void ResetHeat() => Heat_J_per_m3 = 0;
 }

@@ -31,6 +31,9 @@ public sealed class JointCurve
     /// <summary>Last level of the table, T; beyond it the curve is an extension.</summary>
     public double LastFluxDensity_T => _drop.LastX;
 
+    /// <summary>The drop against flux density, as a branch of a circuit takes it.</summary>
+    public MonotoneCurve Drop => _drop;
+
     /// <summary>MMF drop in excess of the plain steel path, A, at a mean flux density of the limb's steel, T.</summary>
     public double Mmf_A(double fluxDensity_T) => _drop.Value(fluxDensity_T);
 
