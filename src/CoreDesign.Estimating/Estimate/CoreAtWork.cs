@@ -1,0 +1,62 @@
+using CoreDesign.Magnetics.Circuits;
+using CoreDesign.Magnetics.Cores;
+using CoreDesign.Magnetics.Joints;
+
+namespace CoreDesign.Estimating.Estimate;
+
+/// <summary>A resolved design with its fitted steel and solved joint, ready to be solved at any voltage.</summary>
+internal sealed class CoreAtWork
+{
+    /// <summary>A multiple of 96, so that thirds and halves of a period fall on points.</summary>
+    public const int PointsPerPeriod = 288;
+    private readonly CoreCircuit _core;
+
+    /// <exception cref="ArgumentException">Steel curves that no law fits.</exception>
+    /// <exception cref="JointSolveException">The joint lattice has no balance.</exception>
+    public CoreAtWork(ResolvedDesign design)
+    {
+        Design = design;
+        Sheet = CalibratedSheets.Of(design.Steel, design.Supply.Frequency_Hz, design.Temperature_C);
+        if (design.EffectiveGap_m is null)
+        {
+            Joint = JointTables.Of(design.Joint, Sheet.Joint);
+        }
+
+        ZeroSequenceReluctance_A_per_Wb = ZeroSequence(design);
+        _core = CoreCircuit.Build(
+            design.Geometry,
+            Sheet.Sheet.Law,
+            new JointBranch(Joint?.Curve?.Drop, design.EffectiveGap_m ?? 0),
+            ZeroSequenceReluctance_A_per_Wb);
+    }
+
+    public ResolvedDesign Design { get; }
+
+    public SheetAtWork Sheet { get; }
+
+    /// <summary>Null where a works' effective gap replaced the joint model.</summary>
+    public SolvedJoint? Joint { get; }
+
+    public double ZeroSequenceReluctance_A_per_Wb { get; }
+
+    /// <summary>Steady state at a voltage in per cent of rated.</summary>
+    /// <exception cref="NotConvergedException">No steady state.</exception>
+    public CoreSolution SolveAt(double voltage_percent, CancellationToken cancel)
+    {
+        var supply = Design.Supply with { Voltage_V = Design.Supply.Voltage_V * voltage_percent / 100 };
+        return CoreSolver.Solve(
+            _core,
+            new CoreExcitation(supply, Design.Turns, Design.Resistance_ohm, ZeroSequenceReluctance_A_per_Wb),
+            Design.BuildingFactor.Value,
+            new SolverOptions(PointsPerPeriod),
+            cancel);
+    }
+
+    /// <summary>The air path that gives the default zero-sequence reactance: X0 = w N²/(3 R) of rated impedance.</summary>
+    private static double ZeroSequence(ResolvedDesign design)
+    {
+        var rated = design.Supply.Voltage_V * design.Supply.Voltage_V / design.RatedPower_VA;
+        var reactance = DesignDefaults.ZeroSequenceReactance_pu * rated;
+        return 2 * Math.PI * design.Supply.Frequency_Hz * design.Turns * design.Turns / (3 * reactance);
+    }
+}

@@ -1,0 +1,249 @@
+using System.Globalization;
+using CoreDesign.Estimating.Contracts;
+using CoreDesign.Estimating.Fields;
+using CoreDesign.Estimating.Steels;
+using CoreDesign.Magnetics.Circuits;
+using CoreDesign.Magnetics.Geometry;
+using CoreDesign.Magnetics.Joints;
+
+namespace CoreDesign.Estimating.Estimate;
+
+/// <summary>Checks a design, takes defaults for what is open and converts to SI. Collects every error; nothing is corrected silently.</summary>
+internal sealed class DesignResolver(DesignInput input, SteelCatalog steels)
+{
+    private readonly List<FieldError> _errors = [];
+    private readonly List<string> _derived = [];
+    private readonly List<NoteResult> _warnings = [];
+
+    public IReadOnlyList<FieldError> Errors => _errors;
+
+    public ResolvedDesign? Resolve()
+    {
+        var order = input.Order ?? new();
+        var winding = input.ExcitedWinding ?? new();
+        var core = input.Core ?? new();
+        var form = Form(core.Form);
+        var connection = Connection(winding.Connection, form);
+        CheckPhases(order, form);
+        var rated = Needed("order.ratedPower_kVA", order.RatedPower_kVA);
+        var frequency = Needed("order.frequency_Hz", order.Frequency_Hz);
+        var highest = Optional("order.highestVoltage_percent", order.HighestVoltage_percent, DesignDefaults.HighestVoltage_percent);
+        Limit("order.askedNoLoadLoss_W", order.AskedNoLoadLoss_W);
+        Limit("order.askedNoLoadCurrent_percent", order.AskedNoLoadCurrent_percent);
+        CheckTexts(order);
+        var voltage = Needed("excitedWinding.lineVoltage_V", winding.LineVoltage_V);
+        var turns = Needed("excitedWinding.turns", winding.Turns);
+        var resistance = Optional("excitedWinding.resistance_ohm", winding.Resistance_ohm, 0);
+        var steel = Steel();
+        var (joint, effectiveGap, filledJoint) = new JointReader(this).Read(input.Joint);
+        var (geometry, filledCore) = new CoreReader(this).Read(core, form, steel, joint?.Kind ?? JointKind.StepLap);
+        var building = Building(form, joint?.Kind);
+        var temperature = Optional("model.temperature_C", input.Model?.Temperature_C, DesignDefaults.Temperature_C);
+        if (_errors.Count > 0 || geometry is null || steel is null || joint is null || form is null || connection is null || building is null)
+        {
+            return null;
+        }
+
+        return new ResolvedDesign
+        {
+            Inputs = new DesignInput
+            {
+                Order = order with { Phases = connection == SupplyConnection.Single ? 1 : 3, HighestVoltage_percent = highest },
+                ExcitedWinding = winding with { Connection = NameOf(connection.Value), Resistance_ohm = resistance },
+                Steel = input.Steel!.Data is null ? new SteelInput { Grade = steel.Name } : input.Steel,
+                Core = filledCore,
+                Joint = filledJoint,
+                Model = new ModelInput { BuildingFactor = building.Value, Temperature_C = temperature },
+            },
+            Derived = _derived,
+            Warnings = _warnings,
+            Steel = steel,
+            Geometry = geometry,
+            Joint = joint,
+            EffectiveGap_m = effectiveGap,
+            Supply = new Supply(connection.Value, voltage, frequency),
+            Turns = turns,
+            Resistance_ohm = resistance,
+            RatedPower_VA = rated * 1000,
+            HighestVoltage_percent = highest,
+            BuildingFactor = building,
+            Temperature_C = temperature,
+        };
+    }
+
+    internal void Say(string path, string message) => _errors.Add(new FieldError(path, message));
+
+    internal void Warn(string key, string text) => _warnings.Add(new NoteResult(key, text));
+
+    internal void Derive(string path) => _derived.Add(path);
+
+    /// <summary>A value that must be there; NaN where it is not or is out of range, with the error said.</summary>
+    internal double Needed(string path, double? value)
+    {
+        var field = FieldCatalog.Find(path);
+        if (value is not { } v)
+        {
+            Say(path, field.Missing());
+            return double.NaN;
+        }
+
+        if (field.Check(v) is { } message)
+        {
+            Say(path, message);
+            return double.NaN;
+        }
+
+        return v;
+    }
+
+    /// <summary>A value with a default.</summary>
+    internal double Optional(string path, double? value, double @default)
+    {
+        if (value is null)
+        {
+            Derive(path);
+            return @default;
+        }
+
+        return Needed(path, value);
+    }
+
+    private void Limit(string path, double? value)
+    {
+        if (value is not null)
+        {
+            Needed(path, value);
+        }
+    }
+
+    private void CheckTexts(OrderInput order)
+    {
+        if (order.Reference is { Length: > 80 } r)
+        {
+            Say("order.reference", $"The reference has {r.Length} characters; at most 80. Shorten it.");
+        }
+
+        for (var i = 0; i < (order.RatedVoltages_kV?.Count ?? 0); i++)
+        {
+            Needed(string.Create(CultureInfo.InvariantCulture, $"order.ratedVoltages_kV[{i}]"), order.RatedVoltages_kV![i]);
+        }
+    }
+
+    private CoreForm? Form(string? form)
+    {
+        switch (form)
+        {
+            case "threeLimb":
+                return CoreForm.ThreeLimb;
+            case "singlePhaseTwoLimb":
+                return CoreForm.SinglePhaseTwoLimb;
+            case null:
+                Say("core.form", "The core form is missing. Give threeLimb or singlePhaseTwoLimb.");
+                return null;
+            default:
+                Say("core.form", $"Core form '{Cut(form)}' is not known here. Give threeLimb or singlePhaseTwoLimb.");
+                return null;
+        }
+    }
+
+    private SupplyConnection? Connection(string? connection, CoreForm? form)
+    {
+        if (connection is null)
+        {
+            Derive("excitedWinding.connection");
+            return form == CoreForm.SinglePhaseTwoLimb ? SupplyConnection.Single : SupplyConnection.StarWithNeutral;
+        }
+
+        SupplyConnection? read = connection switch
+        {
+            "single" => SupplyConnection.Single,
+            "YN" => SupplyConnection.StarWithNeutral,
+            "Y" => SupplyConnection.StarIsolated,
+            "D" => SupplyConnection.Delta,
+            _ => null,
+        };
+        if (read is null)
+        {
+            Say("excitedWinding.connection", $"Connection '{Cut(connection)}' is not known. Give single, YN, Y or D.");
+        }
+        else if (form is { } f && (read == SupplyConnection.Single) != (f == CoreForm.SinglePhaseTwoLimb))
+        {
+            Say("excitedWinding.connection", f == CoreForm.ThreeLimb
+                ? "Connection 'single' does not fit a three-limb core. Give YN, Y or D."
+                : $"Connection '{connection}' does not fit a single-phase core. Give single.");
+        }
+
+        return read;
+    }
+
+    private void CheckPhases(OrderInput order, CoreForm? form)
+    {
+        if (order.Phases is not { } phases)
+        {
+            Derive("order.phases");
+            return;
+        }
+
+        if (phases is not (1 or 3))
+        {
+            Say("order.phases", string.Create(CultureInfo.InvariantCulture, $"Phases {phases} is neither 1 nor 3. Give 1 or 3."));
+        }
+        else if (form is { } f && (phases == 1) != (f == CoreForm.SinglePhaseTwoLimb))
+        {
+            Say("order.phases", string.Create(CultureInfo.InvariantCulture, $"Phases {phases} does not fit the core form {input.Core!.Form}. Change one of the two."));
+        }
+    }
+
+    private SteelGrade? Steel()
+    {
+        var steel = input.Steel;
+        if (steel?.Data is { } data)
+        {
+            if (steel.Grade is not null)
+            {
+                Say("steel.grade", "Give a grade or data of your own, not both.");
+            }
+
+            var read = SteelFromRequest.Convert(data);
+            _errors.AddRange(read.Errors);
+            _derived.AddRange(read.Derived);
+            _warnings.AddRange(read.Warnings.Select(w => new NoteResult("steel", w.Message)));
+            return read.Grade;
+        }
+
+        if (string.IsNullOrWhiteSpace(steel?.Grade))
+        {
+            Say("steel.grade", "The steel grade is missing. Choose one of the library, or give data of your own.");
+            return null;
+        }
+
+        if (steels.TryFind(steel.Grade, out var grade))
+        {
+            return grade;
+        }
+
+        Say("steel.grade", $"There is no steel '{Cut(steel.Grade)}'. Nearest names: {string.Join(", ", steels.Nearest(Cut(steel.Grade), 3))}.");
+        return null;
+    }
+
+    private BuildingFactorValue? Building(CoreForm? form, JointKind? joint)
+    {
+        if (input.Model?.BuildingFactor is { } given)
+        {
+            return BuildingFactors.Given(Needed("model.buildingFactor", given));
+        }
+
+        Derive("model.buildingFactor");
+        return form is { } f && joint is { } j ? BuildingFactors.Default(f, j) : null;
+    }
+
+    private static string NameOf(SupplyConnection connection) => connection switch
+    {
+        SupplyConnection.Single => "single",
+        SupplyConnection.StarWithNeutral => "YN",
+        SupplyConnection.StarIsolated => "Y",
+        _ => "D",
+    };
+
+    private static string Cut(string text) => text.Length <= 40 ? text : text[..40] + "…";
+}

@@ -1,0 +1,65 @@
+using CoreDesign.Estimating.Contracts;
+using CoreDesign.Magnetics.Circuits;
+using CoreDesign.Magnetics.Cores;
+using CoreDesign.Magnetics.Excitation;
+using CoreDesign.Magnetics.Geometry;
+
+namespace CoreDesign.Estimating.Estimate;
+
+/// <summary>Loss and current by part and cause, largest loss first.</summary>
+internal static class ShareShape
+{
+    public static IReadOnlyList<ShareResult> Of(CoreSolution core)
+    {
+        var s = core.Solution;
+        var current = CurrentOf(s);
+        var extra = CurrentOf(s, (b, t) => s.Circuit.Branches[b].ExtraLoss_A_s_per_Wb * s.FluxRate_Wb_per_s[b][t]);
+        var kinds = core.Core.Geometry.Parts.ToDictionary(p => p.Name, p => p.Kind, StringComparer.Ordinal);
+        (string Cause, string Label, Func<string, bool> Has)[] steel =
+        [
+            ("limbSteel", "Limbs, steel", p => kinds.TryGetValue(p, out var k) && k == CorePartKind.Limb),
+            ("yokeSteel", "Yokes, steel", p => kinds.TryGetValue(p, out var k) && k == CorePartKind.Yoke),
+            ("cornerSteel", kinds.ContainsValue(CorePartKind.TZone) ? "Corners and T zones, steel" : "Corners, steel", p => kinds.TryGetValue(p, out var k) && k is CorePartKind.Corner or CorePartKind.TZone),
+            ("joints", "Joints", p => !kinds.ContainsKey(p)),
+        ];
+        var total = s.CoreLoss_W;
+        var shares = new List<(string Cause, string Label, double Loss, double Current)>();
+        foreach (var (cause, label, has) in steel)
+        {
+            var branches = core.Core.Parts.Where(p => has(p.Part)).SelectMany(p => p.Branches).ToList();
+            shares.Add((cause, label, branches.Sum(b => s.BranchLoss_W(b) - s.ExtraLoss_W[b]), branches.Sum(b => current[b] - extra[b])));
+        }
+
+        shares.Add(("zoneExtra", "Joint and T zones, building factor", s.ExtraLoss_W.Sum(), extra.Sum()));
+
+        // Whatever is left belongs to the air path, which carries current only with an isolated star.
+        return [.. shares
+            .Select(x => new ShareResult
+            {
+                Cause = x.Cause,
+                Label = x.Label,
+                Loss_W = x.Loss,
+                Loss_percent = total > 0 ? 100 * x.Loss / total : 0,
+                Current_percent = 100 * x.Current,
+            })
+            .OrderByDescending(x => x.Loss_W)];
+    }
+
+    /// <summary>
+    /// Exact where the linkages settle the fluxes. With a free neutral or winding resistance each branch's share is its part of the reactive and
+    /// active MMF work, rms F times rms rate, which also adds to one.
+    /// </summary>
+    private static double[] CurrentOf(CircuitSolution s, Func<int, int, double>? part = null)
+    {
+        if (s.FluxPerLinkage is not null)
+        {
+            return CurrentShares.Of(s, part);
+        }
+
+        double Work(int b, Func<int, double> mmf) =>
+            Waveform.Rms([.. Enumerable.Range(0, s.Points).Select(mmf)]) * Waveform.Rms(s.FluxRate_Wb_per_s[b]);
+        var all = Enumerable.Range(0, s.Circuit.Branches.Count).Select(b => Work(b, t => s.Mmf_A[b][t])).ToArray();
+        var total = all.Sum();
+        return [.. all.Select((w, b) => (part is null ? w : Work(b, t => part(b, t))) / total)];
+    }
+}

@@ -1,0 +1,27 @@
+using CoreDesign.Estimating.Contracts;
+using CoreDesign.Estimating.Steels;
+using CoreDesign.Magnetics.Cores;
+using CoreDesign.Magnetics.Excitation;
+
+namespace CoreDesign.Estimating.Estimate;
+
+/// <summary>Loss, current and peak flux density against voltage, each point solved.</summary>
+public static class VoltageSweep
+{
+    /// <summary>Per cent of rated voltage at which the curve is solved.</summary>
+    public static IReadOnlyList<double> Levels { get; } = [80, 85, 90, 95, 100, 102.5, 105, 107.5, 110, 112.5, 115, 117.5, 120];
+
+    public static Outcome<IReadOnlyList<VoltagePointResult>> Run(DesignInput design, SteelCatalog steels, CancellationToken cancel = default) =>
+        EstimateDesign.Prepare<IReadOnlyList<VoltagePointResult>>(design, steels, core => Of(core, cancel));
+
+    internal static IReadOnlyList<VoltagePointResult> Of(CoreAtWork core, CancellationToken cancel) =>
+        [.. Levels.Select(v => Point(core, core.SolveAt(v, cancel), v))];
+
+    private static VoltagePointResult Point(CoreAtWork core, CoreSolution s, double voltage_percent) => new()
+    {
+        Voltage_percent = voltage_percent,
+        NoLoadLoss_W = s.Solution.CoreLoss_W,
+        NoLoadCurrent_percent = 100 * LineCurrents.Of(s.Solution).Average(l => Waveform.Rms(l.Current_A)) / core.Design.RatedCurrent_A,
+        PeakFluxDensity_T = PartShape.Worst(s).Peak_T,
+    };
+}
