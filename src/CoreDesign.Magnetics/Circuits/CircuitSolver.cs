@@ -3,8 +3,8 @@ using MathNet.Numerics.LinearAlgebra;
 namespace CoreDesign.Magnetics.Circuits;
 
 /// <summary>Settings of a solve.</summary>
-/// <param name="PointsPerPeriod">Even, 24 to 4096; 256 keeps rms currents within 1e-5 of a much finer grid on smooth curves.</param>
-public sealed record SolverOptions(int PointsPerPeriod = 256)
+/// <param name="PointsPerPeriod">Even, 24 to 4096. A multiple of 12 puts thirds and halves of a period on points, so that equal phases come out equal.</param>
+public sealed record SolverOptions(int PointsPerPeriod = 288)
 {
     /// <summary>Largest allowed change of flux from one half period to the next, over the largest flux.</summary>
     public double Tolerance { get; init; } = 1e-9;
