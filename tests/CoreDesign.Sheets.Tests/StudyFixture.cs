@@ -25,7 +25,9 @@ internal static class StudyFixture
         var lines = three ? new[] { Line("A", 0, 1), Line("B", -120, 0.93), Line("C", 120, 1) } : [Line("A", 0, 1)];
         var ratedCurrent = three ? 1443.4 : 62.5;
         var mean = lines.Average(l => l.Rms_A);
-        var parts = Parts(geometry, limbs, three);
+        var net = geometry.Plates.Sum(p => p.Mass_kg);
+        var rough = Parts(geometry, limbs, three);
+        var parts = rough.ConvertAll(p => p with { Mass_kg = p.Mass_kg * net / rough.Sum(q => q.Count * q.Mass_kg) });
         var loss = parts.Sum(p => p.Loss_W);
         var inputs = Inputs(form, geometry, three, connection, yokeFactor, diameter, steps);
         var representative = standing == "representative";

@@ -1,0 +1,119 @@
+using CoreDesign.Sheets.Design;
+using CoreDesign.Sheets.Pdf;
+using UglyToad.PdfPig;
+using UglyToad.PdfPig.DocumentLayoutAnalysis.TextExtractor;
+
+namespace CoreDesign.Sheets.Tests.Pdf;
+
+public class DesignSheetTests
+{
+    [Theory]
+    [InlineData(PaperSize.A4, 595.276, 841.890)] // ISO 216: 210 mm by 297 mm
+    [InlineData(PaperSize.Letter, 612, 792)] // ANSI/ASME Y14.1: 8.5 in by 11 in
+    public void Every_page_has_the_size_of_its_paper(PaperSize paper, double width, double height)
+    {
+        using var pdf = Open(SheetRequests.Of(StudyFixture.ThreeLimb(), paper));
+        Assert.All(pdf.GetPages(), page =>
+        {
+            Assert.Equal(width, page.Width, 0.01);
+            Assert.Equal(height, page.Height, 0.01);
+        });
+    }
+
+    [Theory]
+    [InlineData(1)]
+    [InlineData(7)]
+    [InlineData(14)]
+    public void Every_page_says_which_of_how_many_it_is(int steps)
+    {
+        using var pdf = Open(SheetRequests.Of(StudyFixture.ThreeLimb(steps)));
+        Assert.True(pdf.NumberOfPages > 1);
+        for (var p = 1; p <= pdf.NumberOfPages; p++)
+        {
+            Assert.Contains($"page {p} of {pdf.NumberOfPages}", Text(pdf, p), StringComparison.Ordinal);
+        }
+    }
+
+    [Fact]
+    public void Key_figures_of_the_study_stand_on_the_sheet()
+    {
+        var study = StudyFixture.ThreeLimb();
+        var e = study.Estimate;
+        using var pdf = Open(SheetRequests.Of(study));
+        var text = Text(pdf);
+        string[] wanted =
+        [
+            Figures.With(Figures.Significant(e.NoLoadLoss_W, 4), "W"),
+            Figures.With(Figures.Significant(e.NoLoadCurrent_percent, 3), "%"),
+            Figures.With(Figures.Significant(e.ExcitingPower_VA, 4), "VA"),
+            Figures.Fixed(e.PowerFactor, 3),
+            Figures.With(Figures.Fixed(e.Margin.AtRated_percent, 1), "%"),
+            Figures.With(Figures.Fixed(e.Margin.AtHighest_percent, 1), "%"),
+            Figures.With(Figures.Significant(e.Mass_kg.Total, 4), "kg"),
+            Figures.With(Figures.Fixed(e.Geometry.NetLimbArea_mm2, 0), "mm²"),
+            Figures.Fixed(e.Geometry.FillRatio, 4),
+            e.Steel.Grade,
+            $"Kernel {e.KernelVersion}",
+            $"steel data revision {e.SteelDataRevision}",
+            e.Model.BuildingFactorSource,
+            e.Warnings[0].Text,
+            e.Sources[1].Text,
+            .. e.Lines.SelectMany(l => l.Harmonics.Where(h => h.Order is 1 or 3 or 13)).Select(h => Figures.Fixed(h.Rms_A, 4)),
+            .. study.VoltageCurve.Select(v => Figures.Fixed(v.NoLoadLoss_W, 1)),
+            .. e.Geometry.LimbSteps.Select(s => Figures.Fixed(s.Stack_mm, 1)),
+            .. e.Geometry.Plates.Select(p => Figures.Fixed(p.LongSide_mm, 1)),
+        ];
+        Assert.All(wanted, w => Assert.Contains(Plain(w), text, StringComparison.Ordinal));
+    }
+
+    [Fact]
+    public void Title_block_holds_its_fields_and_says_that_demo_data_are_invented()
+    {
+        using var pdf = Open(SheetRequests.Of(StudyFixture.ThreeLimb()));
+        var first = Text(pdf, 1);
+        string[] wanted =
+        [
+            "Legal owner", "Halden Ridge", "Core, 1000 kVA", "Identification number", "HR-1042", "Core design sheet", "Draft, not checked",
+            "Revision index", "Responsible department", "Created by", "Desk 2", "Approved by", "not yet", "Date of issue", "2026-11-30", "Scale", "en, page 1",
+            "invented demo data",
+        ];
+        Assert.All(wanted, w => Assert.Contains(w, first, StringComparison.Ordinal));
+        using var real = Open(SheetRequests.Of(StudyFixture.ThreeLimb()) with { InventedDemo = false });
+        Assert.DoesNotContain("invented", Text(real, 1), StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void Representative_steel_is_named_on_the_first_page_and_a_certificate_is_not()
+    {
+        const string sentence = "replace by your certificate before you quote";
+        using var representative = Open(SheetRequests.Of(StudyFixture.ThreeLimb()));
+        Assert.Contains(sentence, Text(representative, 1), StringComparison.Ordinal);
+        using var certificate = Open(SheetRequests.Of(StudyFixture.ThreeLimb(standing: "certificate")));
+        Assert.DoesNotContain(sentence, Text(certificate), StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void Cautions_stand_on_every_design_sheet()
+    {
+        using var pdf = Open(SheetRequests.Of(StudyFixture.SinglePhase(), PaperSize.Letter));
+        var text = Text(pdf);
+        Assert.All(["not a guarantee", "qualified staff only", "net steel", "licensed engineer"], w => Assert.Contains(w, text, StringComparison.Ordinal));
+    }
+
+    [Fact]
+    public void Head_of_a_long_table_comes_back_on_the_next_page()
+    {
+        using var pdf = Open(SheetRequests.Of(StudyFixture.ThreeLimb(16, 400)));
+        var heads = Enumerable.Range(1, pdf.NumberOfPages).Count(p => Text(pdf, p).Contains("long side", StringComparison.Ordinal));
+        Assert.True(heads >= 2, $"48 plates must reach over a page, with their head on each; found it on {heads}.");
+    }
+
+    internal static PdfDocument Open(SheetRequest request) => PdfDocument.Open(DesignSheet.Render(request));
+
+    internal static string Text(PdfDocument pdf) => string.Join(" ", Enumerable.Range(1, pdf.NumberOfPages).Select(p => Text(pdf, p)));
+
+    internal static string Text(PdfDocument pdf, int page) => Plain(ContentOrderTextExtractor.GetText(pdf.GetPage(page)));
+
+    /// <summary>One kind of blank: thin and fixed ones and line ends count the same.</summary>
+    internal static string Plain(string text) => string.Join(' ', text.Replace('\u00A0', ' ').Replace('\u2009', ' ').Split((char[]?)null, StringSplitOptions.RemoveEmptyEntries));
+}
