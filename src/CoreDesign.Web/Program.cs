@@ -1,5 +1,6 @@
 using CoreDesign.Web;
 using CoreDesign.Web.Features.Designs;
+using CoreDesign.Web.Features.Steels;
 using CoreDesign.Web.Platform;
 
 var builder = WebApplication.CreateBuilder(args);
@@ -7,12 +8,14 @@ builder.ListenOnLoopbackByDefault();
 builder.AddProblems();
 builder.AddPages();
 builder.AddHistory();
+builder.AddSteels();
 
 var app = builder.Build();
 app.UseProblems();
 app.UsePages();
 app.MapPages();
 app.MapDesignsApi();
+app.MapSteelsApi();
 if (!app.StartHistory()) return 1;
 app.Run();
 return 0;

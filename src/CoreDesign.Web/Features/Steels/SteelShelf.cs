@@ -16,7 +16,7 @@ public sealed partial class SteelShelf(SteelStore store, ILogger<SteelShelf> log
     public SteelCatalog Current => _current;
 
     /// <summary>Keeps a steel that was checked whole; with a name that is taken by other data, nothing is stored.</summary>
-    public async Task<History.Steels.SteelImport> KeepAsync(SteelGrade grade, CancellationToken cancel = default)
+    public async Task<CoreDesign.History.Steels.SteelImport> KeepAsync(SteelGrade grade, CancellationToken cancel = default)
     {
         ArgumentNullException.ThrowIfNull(grade);
         var kept = await store.AddAsync(grade.Name, DesignJson.Write(grade), cancel);
