@@ -1,5 +1,6 @@
 using CoreDesign.Web;
 using CoreDesign.Web.Features.Designs;
+using CoreDesign.Web.Features.Estimates;
 using CoreDesign.Web.Features.Steels;
 using CoreDesign.Web.Platform;
 
@@ -9,6 +10,7 @@ builder.AddProblems();
 builder.AddPages();
 builder.AddHistory();
 builder.AddSteels();
+builder.AddEstimates();
 
 var app = builder.Build();
 app.UseProblems();
@@ -16,6 +18,7 @@ app.UsePages();
 app.MapPages();
 app.MapDesignsApi();
 app.MapSteelsApi();
+app.MapEstimatesApi();
 if (!app.StartHistory()) return 1;
 app.Run();
 return 0;

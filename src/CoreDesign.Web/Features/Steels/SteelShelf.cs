@@ -8,7 +8,7 @@ namespace CoreDesign.Web.Features.Steels;
 /// The steels that a design can use: the built-in grades and the works' own, read from the history at start and again after
 /// each import. Whoever took <see cref="Current"/> keeps a catalog that doesn't change under the hand.
 /// </summary>
-public sealed partial class SteelShelf(SteelStore store, ILogger<SteelShelf> log) : IHostedService
+public sealed partial class SteelShelf(SteelStore store, ILogger<SteelShelf> log) : IHostedService, IDisposable
 {
     private readonly SemaphoreSlim _gate = new(1, 1);
     private volatile SteelCatalog _current = SteelLibrary.Catalog;
@@ -27,6 +27,8 @@ public sealed partial class SteelShelf(SteelStore store, ILogger<SteelShelf> log
     public Task StartAsync(CancellationToken cancellationToken) => LoadAsync(cancellationToken);
 
     public Task StopAsync(CancellationToken cancellationToken) => Task.CompletedTask;
+
+    public void Dispose() => _gate.Dispose();
 
     private async Task LoadAsync(CancellationToken cancel)
     {

@@ -1,0 +1,31 @@
+using CoreDesign.Estimating.Estimate;
+using CoreDesign.Web.Features.Design;
+using CoreDesign.Web.Features.Designs;
+using CoreDesign.Web.Features.Steels;
+
+namespace CoreDesign.Web.Features.Estimates;
+
+/// <summary>Ties the estimating use cases, with the steels of this works, to the pages and the API that call them.</summary>
+public static class EstimatesSetup
+{
+    public static void AddEstimates(this WebApplicationBuilder builder)
+    {
+        ArgumentNullException.ThrowIfNull(builder);
+        builder.Services.AddSingleton<StudyOfDesign>(services =>
+        {
+            var steels = services.GetRequiredService<SteelShelf>();
+            return (design, cancel) => Task.Run(() => StudyDesign.Run(design, steels.Current, cancel), cancel);
+        });
+        builder.Services.AddSingleton(services =>
+        {
+            var steels = services.GetRequiredService<SteelShelf>();
+            return new DesignEngine
+            {
+                Estimate = (design, cancel) => EstimateDesign.Run(design, steels.Current, cancel),
+                Levers = (design, now, cancel) => Levers.Solve(design, now, steels.Current, cancel),
+                VoltageCurve = (design, _, cancel) => VoltageSweep.Run(design, steels.Current, cancel).Value ?? [],
+                Steels = () => steels.Current,
+            };
+        });
+    }
+}
