@@ -13,6 +13,11 @@ window.coreDesign = {
     field?.focus();
     field?.select?.();
   },
+  showDialog(dialog) { if (!dialog.open) dialog.showModal(); },
+  closeDialog(dialog) { dialog.close(); },
+  // Small conveniences of one person at one browser, such as the name one saves under; never anything that matters.
+  remember(key, value) { try { localStorage.setItem(`coredesign.${key}`, value); } catch { /* private window */ } },
+  remembered(key) { try { return localStorage.getItem(`coredesign.${key}`); } catch { return null; } },
   saveText(name, type, text) {
     const link = document.createElement('a');
     link.href = URL.createObjectURL(new Blob([text], { type }));

@@ -46,15 +46,23 @@ public sealed class DesignPageState
     /// <summary>True where everything typed is valid and answered, so that it can be saved.</summary>
     public bool IsComplete => Estimate is not null && !FiguresAreOld && Solved.Equals(Typed);
 
-    public void Load(DesignText texts)
+    /// <summary>Starts from these texts; <paramref name="keepAnswer"/> leaves the figures of what was open before until the new ones are in.</summary>
+    public void Load(DesignText texts, bool keepAnswer = false)
     {
         undo.Clear();
         touched.Clear();
         refused = [];
         Unsolvable = null;
-        Estimate = null;
-        Derived = DerivedTexts.None;
-        Set(texts);
+        if (!keepAnswer)
+        {
+            Estimate = null;
+            Derived = DerivedTexts.None;
+        }
+
+        if (!keepAnswer || !texts.Equals(Typed))
+        {
+            Set(texts);
+        }
     }
 
     public void Type(string path, string text)
@@ -88,14 +96,16 @@ public sealed class DesignPageState
     public void Take(IEnumerable<KeyValuePair<string, string>> values) =>
         Step(values.Aggregate(Typed, (texts, v) => FormRules.Type(texts, v.Key, v.Value, Estimate?.Geometry)));
 
-    /// <summary>Tries a solved change: only what the lever changed is typed, what was open stays open.</summary>
+    /// <summary>
+    /// Tries a solved change: types what the lever changed and releases what it took away. What the page had filled in (turns, yoke) is pinned to the
+    /// value that the lever was solved with, so that it brings what it promised; all else that was open stays open.
+    /// </summary>
     public void Try(LeverResult lever)
     {
-        var sent = DesignPaths.Flatten(Request.Design);
-        var used = Estimate is null ? sent : DesignPaths.Flatten(Estimate.Inputs);
-        Take(DesignPaths.Flatten(lever.Design)
-            .Where(v => !(sent.TryGetValue(v.Key, out var s) || used.TryGetValue(v.Key, out s)) || !Equals(s, v.Value))
-            .Select(v => KeyValuePair.Create(v.Key, v.Value is double n ? NumberText.Exact(n) : (string)v.Value)));
+        var (sent, solved, tried) = (DesignPaths.Flatten(Request.Design), DesignPaths.Flatten(SolvedDesign), DesignPaths.Flatten(lever.Design));
+        var open = solved.Keys.Where(k => !tried.ContainsKey(k)).Aggregate(Typed, (texts, path) => texts.Without(path));
+        var changed = tried.Where(v => v.Key != FormPaths.Phases && (!sent.TryGetValue(v.Key, out var s) || !Equals(s, v.Value)));
+        Step(changed.Aggregate(open, (texts, v) => FormRules.Type(texts, v.Key, v.Value is double n ? NumberText.Exact(n) : (string)v.Value, Estimate?.Geometry)));
     }
 
     public void Undo() => Set(undo.Undo(Typed));

@@ -35,10 +35,8 @@ public sealed record FormField(string Path, FieldKind Kind = FieldKind.Number)
 
     public IReadOnlyList<FormChoice> Choices { get; init; } = [];
 
-    /// <summary>Id of the input, by which labels, messages and dimension lines find it.</summary>
-    public string Id => IdOf(Path);
-
-    public static string IdOf(string path) => "f-" + path.Replace('.', '-').Replace('[', '-').Replace("]", "", StringComparison.Ordinal);
+    /// <summary>What the arrow keys add; null where the field has no natural step.</summary>
+    public double? Step { get; init; }
 }
 
 public sealed record FormChoice(string Value, string Label);
