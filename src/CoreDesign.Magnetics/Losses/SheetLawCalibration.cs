@@ -42,6 +42,10 @@ public static class SheetLawCalibration
     private const double ExcessFloor_T_per_s = 150;
     private const double ReferenceFluxDensity_T = 1.5;
 
+    // The stops of lowest threshold would put a notch into every loop where it crosses B = 0. A straight spine there takes it out; tips of
+    // loops smaller than this, which no power core sees, are off the peak curve by up to 2 A/m.
+    private const double StraightBelow_T = 0.3;
+
     // Loss is met exactly at the knots; the first carries none, which leaves the field below 0.05 T reversible.
     private static readonly double[] Knots =
         [0.05, 0.1, 0.2, 0.3, 0.4, 0.5, 0.6, 0.7, 0.8, 0.9, 1.0, 1.1, 1.2, 1.3, 1.4, 1.5, 1.55, 1.6, 1.65, 1.7, 1.75, 1.8, 1.85, 1.9, 1.95, 2.0];
@@ -135,8 +139,10 @@ public static class SheetLawCalibration
     {
         // Dense enough that the cubics follow the peak curve between its own points to a small fraction of a per cent.
         double[] b = [.. Enumerable.Range(1, 600).Select(i => i * 0.005).Where(x => x < tip.LastX).Append(tip.LastX)];
-        double[] h = Array.ConvertAll(b, x => tip.Value(x) - stops.Sum(s => s.Weight_A_per_m_T * Math.Min(s.Threshold_T, x)));
+        double[] h = Array.ConvertAll(b, x => x < StraightBelow_T ? At(StraightBelow_T) * x / StraightBelow_T : At(x));
         return new MonotoneCurve(b, h, 1 / MagneticConstants.Mu0_H_per_m, rising: false);
+
+        double At(double x) => tip.Value(x) - stops.Sum(s => s.Weight_A_per_m_T * Math.Min(s.Threshold_T, x));
     }
 
     /// <summary>True where the rising branch of static loops keeps at least half of its coercive field all the way up: a loop that no sheet would show is turned down.</summary>
