@@ -1,6 +1,7 @@
 using CoreDesign.Web;
 using CoreDesign.Web.Features.Designs;
 using CoreDesign.Web.Features.Estimates;
+using CoreDesign.Web.Features.Sheets;
 using CoreDesign.Web.Features.Steels;
 using CoreDesign.Web.Platform;
 
@@ -19,6 +20,7 @@ app.MapPages();
 app.MapDesignsApi();
 app.MapSteelsApi();
 app.MapEstimatesApi();
+app.MapSheetsApi();
 if (!app.StartHistory()) return 1;
 app.Run();
 return 0;
