@@ -152,13 +152,26 @@ public sealed class DesignPageStateTests
     public void Lever_types_only_what_it_changed()
     {
         var state = Solved();
-        var changed = Samples.Estimate.Inputs with { Joint = Samples.Estimate.Inputs.Joint! with { Gap_mm = 0.2 } };
-        state.Try(Samples.Lever(changed));
+        state.Try(Samples.Lever(Samples.Input with { Joint = Samples.Input.Joint! with { Gap_mm = 0.2, Positions = null } }));
 
         Assert.Equal("0.2", state.Typed["joint.gap_mm"]);
+        Assert.Equal("", state.Typed["joint.positions"]);
         Assert.Equal("", state.Typed[FormPaths.StackingFactor]);
         state.Undo();
         Assert.Equal("0.3", state.Typed["joint.gap_mm"]);
+    }
+
+    [Fact]
+    public void Lever_pins_the_turns_that_it_was_solved_with()
+    {
+        var state = Solved();
+        state.Type(FormPaths.Turns, "");
+        var design = Samples.Input with { ExcitedWinding = Samples.Input.ExcitedWinding! with { Turns = 19 } };
+        state.Accept(state.Begin(), design, Samples.Ok(Samples.Estimate));
+
+        state.Try(Samples.Lever(design with { Core = design.Core! with { WindowHeight_mm = 530 } }));
+
+        Assert.Equal("19", state.Typed[FormPaths.Turns]);
     }
 
     [Fact]
