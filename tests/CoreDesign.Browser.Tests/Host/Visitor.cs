@@ -30,7 +30,7 @@ public sealed class Visitor : IAsyncDisposable
 
     public static async Task<Visitor> ComeAsync(IBrowser browser, WebServer server, int width = 1280, int height = 800, ColorScheme scheme = ColorScheme.Light)
     {
-        var context = await browser.NewContextAsync(new()
+        var fresh = await browser.NewContextAsync(new()
         {
             BaseURL = server.Address,
             ViewportSize = new() { Width = width, Height = height },
@@ -38,8 +38,8 @@ public sealed class Visitor : IAsyncDisposable
             ReducedMotion = ReducedMotion.Reduce,
             Locale = "en-GB",
         });
-        context.SetDefaultTimeout(30_000);
-        return new Visitor(context, await context.NewPageAsync(), server.Address);
+        fresh.SetDefaultTimeout(30_000);
+        return new Visitor(fresh, await fresh.NewPageAsync(), server.Address);
     }
 
     /// <summary>A second tab of the same person.</summary>

@@ -34,6 +34,7 @@ public sealed partial class WebServer : IAsyncDisposable
         var urls = Address.Length == 0 ? "http://127.0.0.1:0" : Address;
         var start = new ProcessStartInfo("dotnet", ["exec", program, "--urls", urls])
         {
+            UseShellExecute = false,
             RedirectStandardOutput = true,
             RedirectStandardError = true,
             WorkingDirectory = DataFolder,
