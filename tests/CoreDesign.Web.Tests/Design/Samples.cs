@@ -63,6 +63,12 @@ internal static class Samples
 
     public static LeverResult Lever(DesignInput design) => new()
     {
-        Key = "tighterGap", Label = "Gap 0.2 mm", Design = design, LossChange_W = -5, CurrentChange_points = -0.01, MassChange_kg = 0, MarginChange_points = 0,
+        Key = "tighterGap",
+        Label = "Gap 0.2 mm",
+        Design = design,
+        LossChange_W = -5,
+        CurrentChange_points = -0.01,
+        MassChange_kg = 0,
+        MarginChange_points = 0,
     };
 }
