@@ -31,7 +31,7 @@ public sealed class DemoOrdersTests
     /// <summary>Induced voltage of a sine flux, E = (2 pi / sqrt 2) f N A B: a textbook formula.</summary>
     [Theory]
     [MemberData(nameof(Keys))]
-    public void Limb_works_between_1_55_and_1_72_tesla(string key)
+    public void Limb_works_between_1_4_and_1_72_tesla(string key)
     {
         var design = DemoOrders.TryFind(key)!.Design;
         var winding = design.ExcitedWinding!;
@@ -42,7 +42,7 @@ public sealed class DemoOrdersTests
 
         var b = phaseVoltage / (2 * Math.PI / Math.Sqrt(2) * design.Order!.Frequency_Hz!.Value * winding.Turns!.Value * net_m2);
 
-        Assert.InRange(b, 1.55, 1.72);
+        Assert.InRange(b, 1.4, 1.72);
     }
 
     [Theory]
