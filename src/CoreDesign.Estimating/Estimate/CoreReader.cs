@@ -25,6 +25,11 @@ internal sealed class CoreReader(DesignResolver resolver)
             return (null, filled);
         }
 
+        if (!YokesFit(steps, form.Value, joint, core))
+        {
+            return (null, filled);
+        }
+
         filled = filled with { WindowWidth_mm = window, LimbPitch_mm = window + (section.Steps[0].Width_m * 1000) };
         try
         {
@@ -95,7 +100,18 @@ internal sealed class CoreReader(DesignResolver resolver)
                 resolver.Needed(path + ".stack_mm", typed[i].Stack_mm) / 1000));
         }
 
-        return steps.Exists(s => double.IsNaN(s.Width_m + s.Stack_m)) ? null : StepSet.FromSteps(steps);
+        var before = resolver.Errors.Count;
+        for (var i = 1; i < typed.Count; i++)
+        {
+            if (typed[i].Width_mm >= typed[i - 1].Width_mm)
+            {
+                resolver.Say(
+                    string.Create(CultureInfo.InvariantCulture, $"core.limbSteps[{i}].width_mm"),
+                    string.Create(CultureInfo.InvariantCulture, $"Step width {typed[i].Width_mm} mm is not below {typed[i - 1].Width_mm} mm, the step before. Order the steps from the widest outward; join steps of one width."));
+            }
+        }
+
+        return resolver.Errors.Count > before || steps.Exists(s => double.IsNaN(s.Width_m + s.Stack_m)) ? null : StepSet.FromSteps(steps);
     }
 
     private StepSet? FromCircle(LimbInput limb)
@@ -202,6 +218,28 @@ internal sealed class CoreReader(DesignResolver resolver)
         return double.IsNaN(factor) ? null : section.WithYokes(factor);
     }
 
+    /// <summary>Yoke widths fall or stay with the limb's, and a mitred T joint's points (half the limb's width) end inside the yoke.</summary>
+    private bool YokesFit(IReadOnlyList<CoreStep> steps, CoreForm form, JointKind joint, CoreInput core)
+    {
+        var before = resolver.Errors.Count;
+        for (var k = 0; k < steps.Count; k++)
+        {
+            double yoke = steps[k].YokeWidth_m * 1000, limb = steps[k].LimbWidth_m * 1000;
+            var path = core.Yoke?.StepWidths_mm is null ? "core.yoke.areaFactor" : string.Create(CultureInfo.InvariantCulture, $"core.yoke.stepWidths_mm[{k}]");
+            if (k > 0 && steps[k].YokeWidth_m > steps[k - 1].YokeWidth_m)
+            {
+                resolver.Say(path, string.Create(CultureInfo.InvariantCulture, $"Yoke step width {yoke:0.###} mm is above {steps[k - 1].YokeWidth_m * 1000:0.###} mm, the step before. Let the yoke widths fall or stay as the limb widths fall."));
+            }
+            else if (form == CoreForm.ThreeLimb && joint != JointKind.ButtLap && yoke <= (limb / 2) + 1e-6)
+            {
+                resolver.Say(path, string.Create(CultureInfo.InvariantCulture, $"A yoke of {yoke:0.###} mm is too low for the points of the middle limb, which reach {limb / 2:0.###} mm into it. Take a yoke above half the limb width, or square joints."));
+                return false;
+            }
+        }
+
+        return resolver.Errors.Count == before;
+    }
+
     /// <summary>The kernel speaks of its own arguments in metres; here they get the field's path.</summary>
     private static string PathOf(string property, CoreInput core)
     {
@@ -220,5 +258,6 @@ internal sealed class CoreReader(DesignResolver resolver)
         };
     }
 
-    private static string Words(GeometryException e) => e.Message + " (lengths here in metres)";
+    /// <summary>Last resort, for what the checks above let through: the kernel's message, which counts in metres.</summary>
+    private static string Words(GeometryException e) => "Lengths here in metres: " + e.Message;
 }
