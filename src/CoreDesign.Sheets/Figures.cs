@@ -74,8 +74,13 @@ public static class Figures
     /// <summary>A change, with its sign; what rounds to nothing is a plain 0.</summary>
     public static string Change(double value, int decimals)
     {
+        if (!double.IsFinite(value))
+        {
+            return Nothing;
+        }
+
         var text = Fixed(value, decimals);
-        return text.AsSpan().IndexOfAnyInRange('1', '9') < 0 && double.IsFinite(value) ? "0" : value > 0 ? "+" + text : text;
+        return text.AsSpan().IndexOfAnyInRange('1', '9') < 0 ? "0" : value > 0 ? "+" + text : text;
     }
 
     /// <summary>Figure and unit, kept on one line.</summary>

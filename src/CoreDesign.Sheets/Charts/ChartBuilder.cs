@@ -84,16 +84,34 @@ internal sealed class ChartBuilder
     public void Legend(bool upperLeft)
     {
         const double sample = 22;
-        double row = _o.TextSize + 3, width = sample + 6 + _series.Select(s => TextExtent.Width(s.Name, _o.TextSize)).DefaultIfEmpty(0).Max();
+        double row = _o.TextSize + 3, width = sample + 6 + _series.Select(s => TextExtent.Width(Shortened(s.Name), _o.TextSize)).DefaultIfEmpty(0).Max();
         double x = upperLeft ? Plot.X + 8 : Plot.Right - width - 4, y = upperLeft ? Plot.Y + 4 : Plot.Bottom - (row * _series.Count) - 4;
         _marks.Add(new PathMark(new Box(x - 3, y, width + 6, row * _series.Count).Corners(), true, Ink.Paper, Paint.None));
         foreach (var series in _series)
         {
             var line = y + (row / 2);
             _marks.Add(new PathMark([new(x, line), new(x + sample, line)], false, Paint.None, series.Look.Ink, series.Look.Width, series.Look.Dash));
-            Text(new TextMark(new(x + sample + 6, line + (_o.TextSize * 0.36)), series.Name, _o.TextSize, Anchor.Start, Ink.Ink));
+            Text(new TextMark(new(x + sample + 6, line + (_o.TextSize * 0.36)), Shortened(series.Name), _o.TextSize, Anchor.Start, Ink.Ink));
             y += row;
         }
+    }
+
+    // A name may be as long as a person likes; half of the plot is enough for it here, the table has it whole.
+    private string Shortened(string name)
+    {
+        var room = Plot.Width / 2;
+        if (TextExtent.Width(name, _o.TextSize) <= room)
+        {
+            return name;
+        }
+
+        var end = name.Length;
+        while (end > 1 && (TextExtent.Width(name[..end], _o.TextSize) + (0.8 * _o.TextSize) > room || char.IsHighSurrogate(name[end - 1])))
+        {
+            end--;
+        }
+
+        return name[..end] + "\u2026";
     }
 
     /// <summary>A dashed upright line at a value of the abscissa; nothing where that lies outside.</summary>

@@ -24,7 +24,7 @@ internal sealed class DimensionPen(DrawingOptions options)
     private const double Past = 4;
     private const double Off = 3;
     private const double Head = 8;
-    public const double Tail = 14;
+    public const double Tail = 13;
 
     public double Size => options.DimensionSize;
 
@@ -35,13 +35,14 @@ internal sealed class DimensionPen(DrawingOptions options)
 
     public bool Fits(DimensionText d, double span) => span >= Math.Max(Width(d) + 8, (2 * Head) + 6);
 
-    /// <param name="outside">Where the text starts (or ends, to the left) when it doesn't fit; null where it must fit.</param>
     /// <param name="from">Ordinate of the object, where extension lines begin; null without them.</param>
-    public GroupMark Horizontal(DimensionText d, double x1, double x2, double y, double? from, double? outside = null)
+    /// <param name="outside">Where the text starts (or ends, to the left) when it doesn't fit; null where it must fit.</param>
+    /// <param name="middle">Middle of a text that fits but has to stand off the middle of its span.</param>
+    public GroupMark Horizontal(DimensionText d, double x1, double x2, double y, double? from, double? outside = null, double? middle = null)
     {
         var marks = new List<Mark>();
         AddExtensions(marks, from, y, e => (new XY(x1, e.A), new XY(x1, e.B)), e => (new XY(x2, e.A), new XY(x2, e.B)));
-        double lineFrom = x1, lineTo = x2, textAt = (x1 + x2) / 2;
+        double lineFrom = x1, lineTo = x2, textAt = middle ?? ((x1 + x2) / 2);
         var anchor = Anchor.Middle;
         var fits = outside is null;
         if (outside is { } at)

@@ -46,9 +46,12 @@ internal sealed class FrontPlan
 
     public double CalloutX => Core.Right + 42;
 
-    public double RowY(int row) => Core.Bottom + FirstLine + (row * _pen.Pitch);
+    public double RowY(int row) => Core.Bottom + FirstRow + (row * _pen.Pitch);
 
     public double ColumnX(int column) => Core.X - FirstLine - (column * _pen.Pitch);
+
+    // Tails of dimensions at the left may reach past the foot of the core; the first row keeps below them.
+    private double FirstRow => Columns.Exists(c => c.Exists(d => !_pen.Fits(d, Span(d)))) ? FirstLine + 4 : FirstLine;
 
     public double X(double mm) => Core.X + (mm * Scale);
 
@@ -140,6 +143,36 @@ internal sealed class FrontPlan
         }
     }
 
+    /// <summary>
+    /// Place of a row's text from the left edge of the core: its middle where it fits between the arrows, clear of the extension lines of
+    /// the rows further out; else where it begins, close by; else beyond the core, where no extension line runs.
+    /// </summary>
+    public (double? Inside, double? Outside) RowText(DimensionText d, int row)
+    {
+        double x1 = d.From_mm * Scale, x2 = d.To_mm * Scale, width = _pen.Width(d), core = _r.Geometry.OverallWidth_mm * Scale;
+        var lines = Rows.Skip(row + 1).SelectMany(r => r).SelectMany(o => new[] { o.From_mm * Scale, o.To_mm * Scale }).Order().ToArray();
+        bool Clear(double from) => lines.All(x => x < from - 2.5 || x > from + width + 2.5);
+        if (_pen.Fits(d, x2 - x1))
+        {
+            double middle = (x1 + x2 - width) / 2, low = x1 + 4, high = x2 - 4 - width;
+            var starts = lines.SelectMany(x => new[] { x + 3, x - 3 - width }).Where(s => s >= low && s <= high).Prepend(middle).Where(Clear).ToArray();
+            if (starts.Length > 0)
+            {
+                return (starts.MinBy(s => Math.Abs(s - middle)) + (width / 2), null);
+            }
+        }
+
+        if (d.From_mm == 0 && x2 < core)
+        {
+            return (null, -DimensionPen.Tail);
+        }
+
+        var near = x2 + DimensionPen.Tail;
+        return (null, Clear(near) ? near : Math.Max(core + DimensionPen.Tail, near));
+    }
+
+    private double Span(DimensionText d) => (d.To_mm - d.From_mm) * Scale;
+
     private (double Left, double Right, double Top, double Bottom) Margins()
     {
         if (!WithDimensions && !WithNotes)
@@ -147,11 +180,20 @@ internal sealed class FrontPlan
             return (3, 3, _o.DimensionSize + 14, 3);
         }
 
-        var outsideRow = Rows.SelectMany(r => r).Where(d => !_pen.Fits(d, (d.To_mm - d.From_mm) * Scale)).Select(d => _pen.Width(d) + DimensionPen.Tail + 8).DefaultIfEmpty(0).Max();
-        var outsideColumn = Columns.SelectMany(r => r).Where(d => !_pen.Fits(d, (d.To_mm - d.From_mm) * Scale)).Select(d => _pen.Width(d) + DimensionPen.Tail + 8).DefaultIfEmpty(0).Max();
+        double outsideLeft = 0, outsideRight = 0;
+        foreach (var (d, row) in Rows.SelectMany((r, i) => r.Select(d => (d, i))))
+        {
+            if (RowText(d, row).Outside is { } at)
+            {
+                outsideLeft = Math.Max(outsideLeft, at < 0 ? _pen.Width(d) - at : 0);
+                outsideRight = Math.Max(outsideRight, at + _pen.Width(d) - (_r.Geometry.OverallWidth_mm * Scale));
+            }
+        }
+
+        var outsideColumn = Columns.SelectMany(r => r).Where(d => !_pen.Fits(d, Span(d))).Select(d => _pen.Width(d) + DimensionPen.Tail + 8).DefaultIfEmpty(0).Max();
         var left = Columns.Count == 0 ? 8 : FirstLine + ((Columns.Count - 1) * _pen.Pitch) + _pen.Size + DimensionPen.Gap + 6;
-        var bottom = Rows.Count == 0 ? 8 : FirstLine + ((Rows.Count - 1) * _pen.Pitch) + 8;
+        var bottom = Rows.Count == 0 ? 8 : FirstRow + ((Rows.Count - 1) * _pen.Pitch) + 8;
         var right = WithNotes ? Math.Max(_callouts + 42, 30) : 8;
-        return (Math.Max(left, outsideRow + 6), Math.Max(right, outsideRow + 6), Math.Max(_o.DimensionSize + 22, outsideColumn + 6), bottom);
+        return (Math.Max(left, outsideLeft + 4), Math.Max(right, outsideRight + 4), Math.Max(_o.DimensionSize + 22, outsideColumn + 6), bottom);
     }
 }

@@ -79,7 +79,7 @@ internal sealed class FrontView
         {
             var x = _plan.Place(limb.Place_mm).Centre.X;
             var text = new TextMark(new(x, _plan.Core.Y - 13), CoreZones.Mark(_r, limb.Limb), size, Anchor.Middle, Ink.Ink, Bold: true) { Part = "ph" };
-            if (Take(TextExtent.Of(text).Grown(1)))
+            if (new Box(0, 0, _o.Width, _o.Height).Holds(TextExtent.Of(text)) && Take(TextExtent.Of(text).Grown(1)))
             {
                 _marks.Add(Lines.Line(new(x, _plan.Core.Y - 10), new(x, _plan.Core.Y - 2.5), Ink.Ink3));
                 _marks.Add(text);
@@ -134,7 +134,9 @@ internal sealed class FrontView
 
         if (_plan.InsideWidth is { } width)
         {
-            Add(_pen.Horizontal(width, limbs[^2].Right, limbs[^1].X, limbs[0].Centre.Y + (_o.DimensionSize * 0.4), null));
+            var y = limbs[0].Centre.Y + (_o.DimensionSize * 0.4);
+            Add(_pen.Horizontal(width, limbs[^2].Right, limbs[^1].X, y, null));
+            _taken.Add(new Box(limbs[^2].Right, y - 3, limbs[^1].X - limbs[^2].Right, 6));
         }
 
         for (var row = 0; row < _plan.Rows.Count; row++)
@@ -142,7 +144,8 @@ internal sealed class FrontView
             foreach (var d in _plan.Rows[row])
             {
                 double x1 = _plan.X(d.From_mm), x2 = _plan.X(d.To_mm);
-                Add(_pen.Horizontal(d, x1, x2, _plan.RowY(row), _plan.Core.Bottom, _pen.Fits(d, x2 - x1) ? null : Outside(d, row)));
+                var (inside, outside) = _plan.RowText(d, row);
+                Add(_pen.Horizontal(d, x1, x2, _plan.RowY(row), _plan.Core.Bottom, outside + _plan.Core.X, inside + _plan.Core.X));
             }
         }
 
@@ -154,19 +157,6 @@ internal sealed class FrontView
                 Add(_pen.Vertical(d, y1, y2, _plan.ColumnX(column), _plan.Core.X, _pen.Fits(d, y2 - y1) ? null : _plan.Core.Y - DimensionPen.Tail));
             }
         }
-    }
-
-    // Close by, unless an extension line of a row further out runs through there; then beyond the core.
-    private double Outside(DimensionText d, int row)
-    {
-        if (d.From_mm == 0 && d.To_mm < _r.Geometry.OverallWidth_mm)
-        {
-            return _plan.Core.X - DimensionPen.Tail;
-        }
-
-        double near = _plan.X(d.To_mm) + DimensionPen.Tail, end = near + _pen.Width(d);
-        var lines = _plan.Rows.Skip(row + 1).SelectMany(r => r).SelectMany(o => new[] { _plan.X(o.From_mm), _plan.X(o.To_mm) });
-        return lines.All(x => x < near - 3 || x > end + 3) ? near : Math.Max(_plan.Core.Right + DimensionPen.Tail, near);
     }
 
     /// <summary>Where the notes must end above it.</summary>

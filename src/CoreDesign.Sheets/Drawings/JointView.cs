@@ -82,27 +82,27 @@ internal sealed class JointView(EstimateResult r, DrawingOptions o)
             _marks.Add(_pen.Horizontal(d, first, first + gapPx, top - 8, top + 2, _pen.Fits(d, gapPx) ? null : at));
         }
 
-        var y = end + _pen.Pitch - 2;
-        double left = TextExtent.Width("limb", o.TextSize) + 8, right = o.Width - TextExtent.Width("yoke", o.TextSize) - 8;
+        var taken = new List<Box>();
         if (positions > 1 && shift > 0)
         {
             var d = DimensionText.Of("Overlap, shift between neighbouring positions,", shift, 0, shift, "joint.overlap_mm", FieldState.Typed(r, "joint.overlap_mm", true));
-            double x2 = first + ((positions - 1) * shift * scale), x1 = x2 - (shift * scale);
-            double? outside = null;
-            if (!_pen.Fits(d, x2 - x1))
-            {
-                outside = x2 + DimensionPen.Tail;
-                right = Math.Max(right, outside.Value + _pen.Width(d) + 8);
-            }
-
-            _marks.Add(_pen.Horizontal(d, x1, x2, y, lastTop, outside));
+            double x2 = first + ((positions - 1) * shift * scale), x1 = x2 - (shift * scale), after = x2 + DimensionPen.Tail;
+            double? outside = _pen.Fits(d, x2 - x1) ? null : after + _pen.Width(d) <= o.Width ? after : x1 - DimensionPen.Tail;
+            var dimension = _pen.Horizontal(d, x1, x2, end + _pen.Pitch - 2, lastTop, outside);
+            _marks.Add(dimension);
+            taken.AddRange(TextExtent.Texts([dimension]).Select(t => TextExtent.Of(t).Grown(4)));
+            taken.Add(new Box(x1 - 4, end, x2 - x1 + 8, _pen.Pitch + 4));
         }
 
+        // The names of the two sides yield to the dimension.
         var foot = end + o.TextSize + 1;
-        _marks.Add(new TextMark(new(0, foot), "limb", o.TextSize, Anchor.Start, Ink.Ink2));
-        if (right <= o.Width - TextExtent.Width("yoke", o.TextSize) - 8 + 0.01)
+        foreach (var side in new[] { new TextMark(new(0, foot), "limb", o.TextSize, Anchor.Start, Ink.Ink2), new TextMark(new(o.Width, foot), "yoke", o.TextSize, Anchor.End, Ink.Ink2) })
         {
-            _marks.Add(new TextMark(new(o.Width, foot), "yoke", o.TextSize, Anchor.End, Ink.Ink2));
+            if (!taken.Exists(t => t.Overlaps(TextExtent.Of(side))))
+            {
+                _marks.Add(side);
+                taken.Add(TextExtent.Of(side).Grown(4));
+            }
         }
     }
 
