@@ -13,7 +13,7 @@ export function start(reference) {
     watching.push(() => document.removeEventListener(name, handler, name === 'pointerleave'));
   }
   const painted = new MutationObserver(changes => {
-    if (changes.some(c => c.type === 'childList')) { dress(); room(); }
+    if (changes.some(c => c.type === 'childList')) { dress(); room(); reveal(); }
     if (changes.some(c => c.attributeName === 'data-answered')) answered();
   });
   painted.observe(document.querySelector('main'), { childList: true, subtree: true, attributes: true, attributeFilter: ['data-answered'] });
@@ -87,6 +87,12 @@ function dress() {
 function light(key) {
   document.querySelectorAll('[data-drawing] .lit').forEach(g => g.classList.remove('lit'));
   if (key) dims(key).forEach(g => g.classList.add('lit'));
+}
+
+// A message that appears under the field one types in must not lie below the edge.
+function reveal() {
+  const message = document.activeElement?.closest?.('.fields .f')?.nextElementSibling;
+  if (message?.matches('.msg')) message.scrollIntoView({ block: 'nearest' });
 }
 
 let before = '';
@@ -231,7 +237,7 @@ function show(plot, m, i) {
     g.append(make('line', { x1: px, x2: px, y1: box.y, y2: box.y + box.height }));
   }
   const words = [];
-  for (const s of m.chart.series) {
+  for (const s of [...m.chart.series].sort((a, b) => (a.name < b.name ? -1 : 1))) {
     // Series may be sampled apart: each reads at its own nearest point.
     const k = s.x.length === first.x.length ? i : s.x.reduce((b, v, j) => (Math.abs(v - x) < Math.abs(s.x[b] - x) ? j : b), 0);
     const p = place(m, s, k);

@@ -26,7 +26,7 @@ public static class SizingAid
     public const double DiameterIncrement_mm = 1;
 
     /// <summary>
-    /// The design with what follows from a wanted yoke height (the area factor that gives it) and a wanted flux density (whole turns,
+    /// The design with what follows from a wanted yoke height (the area factor that gives it, to six decimals) and a wanted flux density (whole turns,
     /// where none are typed). A design that does not say enough comes back as it is, and the estimate says what is missing.
     /// </summary>
     public static DesignInput Complete(DesignInput design, double? yokeHeight_mm, double? wantedFluxDensity_T, SteelCatalog steels)
@@ -39,7 +39,7 @@ public static class SizingAid
 
         if (yokeHeight_mm is { } height && design.Core?.Yoke is null)
         {
-            design = design with { Core = (design.Core ?? new()) with { Yoke = new YokeInput { AreaFactor = height / 1000 / limb.Steps.Steps[0].Width_m } } };
+            design = design with { Core = (design.Core ?? new()) with { Yoke = new YokeInput { AreaFactor = Math.Round(height / 1000 / limb.Steps.Steps[0].Width_m, 6) } } };
         }
 
         if (wantedFluxDensity_T is { } wanted && design.ExcitedWinding?.Turns is null && TurnsFor(design, wanted, limb) is { } turns)

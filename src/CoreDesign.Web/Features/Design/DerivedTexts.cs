@@ -28,15 +28,15 @@ public sealed class DerivedTexts
         var g = estimate.Geometry;
         derived.texts[FormPaths.Diameter] = NumberText.Short(g.CircleDiameter_mm);
         derived.texts[FormPaths.StepCount] = NumberText.Exact(g.LimbSteps.Count);
-        derived.texts[FormPaths.WindowWidth] = NumberText.Short(g.WindowWidth_mm, 5);
-        derived.texts[FormPaths.LimbPitch] = NumberText.Short(g.LimbPitch_mm, 5);
-        derived.texts[FormPaths.YokeHeight] = NumberText.Short(g.YokeHeight_mm, 5);
+        derived.texts[FormPaths.WindowWidth] = NumberText.Short(g.WindowWidth_mm);
+        derived.texts[FormPaths.LimbPitch] = NumberText.Short(g.LimbPitch_mm);
+        derived.texts[FormPaths.YokeHeight] = NumberText.Short(g.YokeHeight_mm);
         derived.texts[FormPaths.YokeFactor] = NumberText.Short(g.NetYokeArea_mm2 / g.NetLimbArea_mm2);
         for (var i = 0; i < g.LimbSteps.Count; i++)
         {
-            derived.texts[FormPaths.StepWidth(i)] = NumberText.Short(g.LimbSteps[i].Width_mm, 5);
-            derived.texts[FormPaths.StepStack(i)] = NumberText.Short(g.LimbSteps[i].Stack_mm, 5);
-            derived.texts[FormPaths.YokeWidth(i)] = NumberText.Short(g.LimbSteps[i].YokeWidth_mm, 5);
+            derived.texts[FormPaths.StepWidth(i)] = NumberText.Short(g.LimbSteps[i].Width_mm);
+            derived.texts[FormPaths.StepStack(i)] = NumberText.Short(g.LimbSteps[i].Stack_mm);
+            derived.texts[FormPaths.YokeWidth(i)] = NumberText.Short(g.LimbSteps[i].YokeWidth_mm);
         }
 
         return derived;

@@ -47,6 +47,9 @@ public sealed partial class DesignPage
 
     private string Rating => session is null ? "" : RatingText.Of(State.Request.Design);
 
+    /// <summary>Where the browser remembers the draft of this address.</summary>
+    private string DraftPlace => Id is { } id ? $"draft-{id}" : "draft-new";
+
     private int NextNumber => session?.Base is null ? 1 : session.NewestRevision + 1;
 
     private string? SheetAddress => session?.Base is { } open ? $"/api/designs/{open.Info.Id}/revisions/{open.Info.Revision}/sheets/design.pdf" : null;
@@ -73,6 +76,8 @@ public sealed partial class DesignPage
         Show();
         if (RendererInfo.IsInteractive && !opening.NotFound)
         {
+            StateHasChanged();
+            await opening.FindLeftAsync(await Js.InvokeAsync<string?>("coreDesign.remembered", DraftPlace));
             StateHasChanged();
             await opening.StartAsync();
             Show();
@@ -204,6 +209,7 @@ public sealed partial class DesignPage
         if (!keyed && session.DraftKey is { } key)
         {
             Navigation.NavigateTo(Navigation.GetUriWithQueryParameter("draft", key), replace: true);
+            await Js.InvokeVoidAsync("coreDesign.remember", DraftPlace, key.ToString());
         }
 
         await answering;
@@ -243,6 +249,8 @@ public sealed partial class DesignPage
                 return "This design is no longer in the history. Copy what you need and start a new design.";
         }
     }
+
+    private string LeftAddress(Guid key) => Id is { } id ? $"design/{id}?draft={key}" : $"design?draft={key}";
 
     private void OpenNewest() => Navigation.NavigateTo($"design/{Id}");
 }

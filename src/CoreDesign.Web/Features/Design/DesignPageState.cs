@@ -97,15 +97,18 @@ public sealed class DesignPageState
         Step(values.Aggregate(Typed, (texts, v) => FormRules.Type(texts, v.Key, v.Value, Estimate?.Geometry)));
 
     /// <summary>
-    /// Tries a solved change: types what the lever changed and releases what it took away. What the page had filled in (turns, yoke) is pinned to the
-    /// value that the lever was solved with, so that it brings what it promised; all else that was open stays open.
+    /// Tries a solved change: types what the lever changed and releases what it took away; what was open stays open. Only where the change would make the
+    /// page fill in other turns or another yoke, those are pinned to what the lever was solved with, so that it brings what it promised.
     /// </summary>
     public void Try(LeverResult lever)
     {
-        var (sent, solved, tried) = (DesignPaths.Flatten(Request.Design), DesignPaths.Flatten(SolvedDesign), DesignPaths.Flatten(lever.Design));
+        var (solved, tried) = (DesignPaths.Flatten(SolvedDesign), DesignPaths.Flatten(lever.Design));
+        var changed = tried.Where(v => !solved.TryGetValue(v.Key, out var s) || !Equals(s, v.Value)).ToList();
+        var section = changed.Exists(v => v.Key.StartsWith("core.limb", StringComparison.Ordinal));
+        var pins = tried.Where(v => !Typed.Has(v.Key) && ((v.Key == FormPaths.YokeFactor && section) || (v.Key == FormPaths.Turns && (section || changed.Exists(c => c.Key == FormPaths.Grade)))));
         var open = solved.Keys.Where(k => !tried.ContainsKey(k)).Aggregate(Typed, (texts, path) => texts.Without(path));
-        var changed = tried.Where(v => v.Key != FormPaths.Phases && (!sent.TryGetValue(v.Key, out var s) || !Equals(s, v.Value)));
-        Step(changed.Aggregate(open, (texts, v) => FormRules.Type(texts, v.Key, v.Value is double n ? NumberText.Exact(n) : (string)v.Value, Estimate?.Geometry)));
+        Step(changed.Concat(pins).DistinctBy(v => v.Key)
+            .Aggregate(open, (texts, v) => FormRules.Type(texts, v.Key, v.Value is double n ? NumberText.Exact(n) : (string)v.Value, Estimate?.Geometry)));
     }
 
     public void Undo() => Set(undo.Undo(Typed));

@@ -3,6 +3,7 @@ using CoreDesign.Estimating.Demo;
 using CoreDesign.Estimating.Estimate;
 using CoreDesign.History.Designs;
 using CoreDesign.History.Drafts;
+using CoreDesign.History.Model;
 
 namespace CoreDesign.Web.Features.Design;
 
@@ -39,6 +40,9 @@ public sealed class DesignSession : IAsyncDisposable
 
     /// <summary>What today's kernel and steel data give for the saved revision; null until known.</summary>
     public RecheckResult? Today { get; private set; }
+
+    /// <summary>A draft that this browser left behind at this address, with its reference; null where there is none.</summary>
+    public (Draft Draft, string Reference)? Left { get; private set; }
 
     public Guid? DraftKey => keeper.Key;
 
@@ -78,6 +82,27 @@ public sealed class DesignSession : IAsyncDisposable
         else if (Base is { } saved)
         {
             Today = await Task.Run(() => Recheck.Run(saved.Input, saved.Study.Estimate, engine.Steels()));
+        }
+    }
+
+    /// <summary>Looks for the draft that the browser remembers from an earlier visit.</summary>
+    public async Task FindLeftAsync(string? remembered)
+    {
+        if (!Guid.TryParse(remembered, out var key) || key == DraftKey || await drafts.FindAsync(key) is not { } found || found.DesignId != Base?.Info.Id)
+        {
+            return;
+        }
+
+        var texts = DraftPayload.FromJson(found.Payload) is { } payload ? DesignText.FromJson(payload.Texts) : null;
+        Left = texts is { IsEmpty: false } ? (found, texts[FormPaths.Reference]) : null;
+    }
+
+    public async Task DropLeftAsync()
+    {
+        if (Left is { } left)
+        {
+            Left = null;
+            await drafts.RemoveAsync(left.Draft.Key);
         }
     }
 

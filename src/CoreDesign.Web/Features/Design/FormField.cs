@@ -30,8 +30,8 @@ public sealed record FormField(string Path, FieldKind Kind = FieldKind.Number)
 
     public string Unit => Descriptor?.Unit ?? "";
 
-    /// <summary>The hint on the field: what it is and which range it takes.</summary>
-    public string Hint => Descriptor is { } d ? Kind == FieldKind.NumberList ? $"{d.Help}: {d.Range}, with / between" : $"{d.Help}: {d.Range}" : "";
+    /// <summary>The hint on the field: which range it takes.</summary>
+    public string Hint => Descriptor is { } d ? Kind == FieldKind.NumberList ? $"{d.Range}, with / between" : d.Range : "";
 
     public IReadOnlyList<FormChoice> Choices { get; init; } = [];
 

@@ -37,7 +37,7 @@ public static partial class FormRules
         var steps = geometry?.LimbSteps ?? [];
         for (var i = 0; i < steps.Count; i++)
         {
-            texts = texts.With(FormPaths.StepWidth(i), NumberText.Short(steps[i].Width_mm, 6)).With(FormPaths.StepStack(i), NumberText.Short(steps[i].Stack_mm, 6));
+            texts = texts.With(FormPaths.StepWidth(i), Tenth(steps[i].Width_mm)).With(FormPaths.StepStack(i), Tenth(steps[i].Stack_mm));
         }
 
         return texts;
@@ -85,7 +85,7 @@ public static partial class FormRules
         var steps = geometry?.LimbSteps ?? [];
         for (var i = 0; i < steps.Count; i++)
         {
-            texts = texts.With(FormPaths.YokeWidth(i), NumberText.Short(steps[i].YokeWidth_mm, 6));
+            texts = texts.With(FormPaths.YokeWidth(i), Tenth(steps[i].YokeWidth_mm));
         }
 
         return texts;
@@ -109,6 +109,9 @@ public static partial class FormRules
         var typed = texts[FormPaths.Connection];
         return typed.Length == 0 || allowed.Any(c => c.Value == typed) ? texts : texts.With(FormPaths.Connection, allowed[0].Value);
     }
+
+    // A set that is typed is cut: tenths of a millimetre are what a works shears and stacks to (common practice, no source).
+    private static string Tenth(double length_mm) => NumberText.Exact(Math.Max(0.2, Math.Round(length_mm, 1)));
 
     [GeneratedRegex(@"^core\.limbSteps\[(?<row>\d{1,3})\]", RegexOptions.ExplicitCapture, 1000)]
     private static partial Regex StepCell();

@@ -23,8 +23,8 @@ public sealed record VerdictFigures(VerdictLine Loss, VerdictLine Current, Verdi
         return new(
             Limited("No-load loss", now.NoLoadLoss_W, saved?.NoLoadLoss_W, order?.AskedNoLoadLoss_W, "W", now.NoLoadLoss_W < 100 ? 1 : 0, "W"),
             Limited("No-load current", now.NoLoadCurrent_percent, saved?.NoLoadCurrent_percent, order?.AskedNoLoadCurrent_percent, "%", decimals, "points"),
-            Margin("at 100 %", now.Margin.AtRated_percent, saved?.Margin.AtRated_percent, now.Margin.PeakAtRated_T, now.Margin.SaturationPolarization_T),
-            Margin($"at {Figures.Plain(highest, 1)} %", now.Margin.AtHighest_percent, saved?.Margin.AtHighest_percent, now.Margin.PeakAtHighest_T, now.Margin.SaturationPolarization_T),
+            Margin("at 100 %", now.Margin.AtRated_percent, saved?.Margin.AtRated_percent, now.Margin.PeakAtRated_T),
+            Margin($"at {Figures.Plain(highest, 1)} %", now.Margin.AtHighest_percent, saved?.Margin.AtHighest_percent, now.Margin.PeakAtHighest_T),
             new("Core mass", Figures.Fixed(now.Mass_kg.Total, now.Mass_kg.Total < 100 ? 1 : 0), "kg", Change(now.Mass_kg.Total, saved?.Mass_kg.Total, now.Mass_kg.Total < 100 ? 1 : 0, "kg"), 0, null, "", "", false));
     }
 
@@ -49,9 +49,9 @@ public sealed record VerdictFigures(VerdictLine Loss, VerdictLine Current, Verdi
         return new(name, figure, unit, change, value / scale, limit / scale, $"asked for {Figures.Plain(limit, 4)}", $"{distance} {changeUnit} {(over ? "over" : "to spare")}", over);
     }
 
-    private static VerdictLine Margin(string name, double value, double? saved, double peak, double saturation) =>
+    private static VerdictLine Margin(string name, double value, double? saved, double peak) =>
         new(name, Figures.Fixed(value, 1), "%", Change(value, saved, 1, "points"), Math.Clamp(value / WidestMargin, 0, 1), null,
-            $"{name}: {Figures.Fixed(peak, 2)} of {Figures.Fixed(saturation, 2)} T", value <= 0 ? "saturated" : "", value <= 0);
+            $"{name}: {Figures.Fixed(peak, 2)} T", value <= 0 ? "saturated" : "", value <= 0);
 
     private static string? Change(double value, double? saved, int decimals, string unit) =>
         saved is { } before ? $"{Figures.Change(value - before, decimals)} {unit}" : null;
