@@ -22,11 +22,10 @@ public static class DesignSheet
         blocks.Add(new Columns(
             [new Heading("Steps of the limb section"), GeometryTables.Steps(e)],
             [new Heading("Where it comes from"), ResultTables.Shares(e), new Heading("Mass"), GeometryTables.Mass(e)]));
-        blocks.Add(new Heading("No-load current"));
-        blocks.Add(ResultTables.Currents(e));
+        blocks.AddRange(EvidenceBlocks.All(request.Study));
         blocks.Add(new Columns([
             (3, [new Heading("Harmonics of the line current"), ResultTables.Harmonics(e)]),
-            (2, [new Heading("Loss and current against voltage"), ResultTables.Voltage(request.Study), new Heading("Energy balance"), ResultTables.Energy(e)])]));
+            (2, [new Heading("No-load current"), ResultTables.Currents(e), new Heading("Energy balance"), ResultTables.Energy(e)])]));
         blocks.Add(new Heading("Plates"));
         blocks.Add(GeometryTables.Plates(e));
         blocks.AddRange(RestBlocks.All(request));

@@ -59,9 +59,9 @@ internal static class GeometryTables
             new Column("peak flux density\nT"), new Column("loss of all\nW"), new Column("exciting power of all\nVA"),
         ],
         [
-            .. e.Parts.Select(p => new Row(
-                Words.Part(p.Name), Plain(p.Count), Fixed(p.Area_mm2, 0), Fixed(p.Length_mm, 1), Fixed(p.Mass_kg, 1),
-                Fixed(p.PeakFluxDensity_T, 3), Fixed(p.Loss_W, 1), Fixed(p.ExcitingPower_VA, 0))),
+            .. PartGroups.Of(e).Select(p => new Row(
+                p.Name, Plain(p.Count), Fixed(p.Area_mm2, 0), p.Length_mm > 0 ? Fixed(p.Length_mm, 1) : "", p.Mass_kg > 0 ? Fixed(p.Mass_kg, 1) : "",
+                Fixed(p.PeakFluxDensity_T, 3), p.Kind == "joint" ? "" : Fixed(p.Loss_W, 1), Fixed(p.ExcitingPower_VA, 0))),
             new Row(["Whole core", "", "", "", Fixed(e.Mass_kg.Total, 1), "", Fixed(e.NoLoadLoss_W, 1), Fixed(e.ExcitingPower_VA, 0)], Sum: true),
         ]);
 
