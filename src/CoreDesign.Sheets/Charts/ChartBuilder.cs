@@ -152,7 +152,14 @@ internal sealed class ChartBuilder
             return;
         }
 
-        double w = TextExtent.Width(series.Label!, _o.TextSize, true), up = 5, down = _o.TextSize + 3;
+        // A name wider than a third of the plot would cover what it names.
+        var label = series.Label!;
+        while (label.Length > 1 && TextExtent.Width(label, _o.TextSize, true) > Plot.Width / 3)
+        {
+            label = label[..(label.Length / 2)];
+        }
+
+        double w = TextExtent.Width(label, _o.TextSize, true), up = 5, down = _o.TextSize + 3;
         var along = Enumerable.Range(1, 15).Select(i => points[i * (points.Count - 1) / 16]).ToArray();
         var places = new[] { (points.MinBy(p => p.Y), -up), (points.MaxBy(p => p.Y), down) }
             .Concat(along.Select(p => (p, -up))).Concat(along.Select(p => (p, down)))
@@ -161,7 +168,7 @@ internal sealed class ChartBuilder
         foreach (var (p, dy) in places)
         {
             var x = Math.Clamp(p.X, Plot.X + (w / 2) + 3, Plot.Right - (w / 2) - 3);
-            var text = new TextMark(new(x, p.Y + dy), series.Label!, _o.TextSize, Anchor.Middle, series.Look.Ink, Bold: true);
+            var text = new TextMark(new(x, p.Y + dy), label, _o.TextSize, Anchor.Middle, series.Look.Ink, Bold: true);
             var box = TextExtent.Of(text).Grown(1);
             if (_taken.Exists(t => t.Overlaps(box)) || box.Y < _o.TextSize + 1 || box.Bottom > Plot.Bottom)
             {

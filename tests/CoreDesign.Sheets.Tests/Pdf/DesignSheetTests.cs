@@ -103,9 +103,9 @@ public class DesignSheetTests
     [Fact]
     public void Head_of_a_long_table_comes_back_on_the_next_page()
     {
-        using var pdf = Open(SheetRequests.Of(StudyFixture.ThreeLimb(16, 400)));
+        using var pdf = Open(SheetRequests.Of(StudyFixture.ThreeLimb(24, 400)));
         var heads = Enumerable.Range(1, pdf.NumberOfPages).Count(p => Text(pdf, p).Contains("long side", StringComparison.Ordinal));
-        Assert.True(heads >= 2, $"48 plates must reach over a page, with their head on each; found it on {heads}.");
+        Assert.True(heads >= 2, $"72 plates must reach over a page, with their head on each; found it on {heads}.");
     }
 
     internal static PdfDocument Open(SheetRequest request) => PdfDocument.Open(DesignSheet.Render(request));
