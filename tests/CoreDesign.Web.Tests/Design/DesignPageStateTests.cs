@@ -92,7 +92,7 @@ public sealed class DesignPageStateTests
         state.Accept(state.Begin(), Samples.Input, new Outcome<EstimateResult> { Errors = [new(FormPaths.LineVoltage, "Missing."), new(FormPaths.Grade, "Missing.")] });
 
         Assert.Empty(state.Messages.Paths);
-        Assert.Equal(["Line voltage", "Grade"], state.Messages.Needed.Select(f => f.Label));
+        Assert.Equal(["Grade", "Line voltage"], state.Messages.Needed.Select(f => f.Label));
 
         state.Leave(FormPaths.LineVoltage);
         Assert.Equal("Missing.", state.Messages[FormPaths.LineVoltage]);
@@ -162,7 +162,7 @@ public sealed class DesignPageStateTests
     }
 
     [Fact]
-    public void Lever_pins_the_turns_that_it_was_solved_with()
+    public void Lever_pins_open_turns_only_where_it_would_change_them()
     {
         var state = Solved();
         state.Type(FormPaths.Turns, "");
@@ -170,7 +170,10 @@ public sealed class DesignPageStateTests
         state.Accept(state.Begin(), design, Samples.Ok(Samples.Estimate));
 
         state.Try(Samples.Lever(design with { Core = design.Core! with { WindowHeight_mm = 530 } }));
+        Assert.Equal("", state.Typed[FormPaths.Turns]);
 
+        state.Undo();
+        state.Try(Samples.Lever(design with { Core = design.Core! with { Limb = design.Core.Limb! with { Diameter_mm = 225 } } }));
         Assert.Equal("19", state.Typed[FormPaths.Turns]);
     }
 

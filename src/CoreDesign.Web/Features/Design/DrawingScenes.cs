@@ -54,7 +54,7 @@ public sealed class DrawingScenes
         Section = Write(CoreDrawing.Section(estimate, reading, part), "core-section");
         Joint = Write(CoreDrawing.JointDetail(estimate, part with { Width = narrow ? Size.Width : Size.Width - half - 16 }), "core-joint");
         Scale = Write(CoreDrawing.ReadingScale(estimate, reading), "core-scale");
-        Small = SvgWriter.Write(CoreDrawing.Front(estimate, reading, new DrawingOptions { Width = 176, Height = 112, Pressable = false }), new SvgOptions { Id = "core-small", Decorative = true });
+        Small = SvgWriter.Write(CoreDrawing.Front(estimate, reading, new DrawingOptions { Width = 168, Height = 96, Pressable = false }), new SvgOptions { Id = "core-small", Decorative = true });
     }
 
     private static string Write(CoreDesign.Sheets.Scenes.Scene scene, string id) => SvgWriter.Write(scene, new SvgOptions { Id = id, Class = "core" });

@@ -14,6 +14,7 @@ public sealed class FieldMessages
             byPath[path] = message + StandsFor(path, solved is null ? null : reading.Standing, derived);
         }
 
+        var needed = new HashSet<string>(StringComparer.Ordinal);
         foreach (var error in refused)
         {
             var path = PlaceOf(error.Path, typed);
@@ -23,20 +24,24 @@ public sealed class FieldMessages
             }
             else if (typed[path].Length == 0 && !touched.Contains(path) && solved is null)
             {
-                Needed.Add(FormLayout.Find(path));
+                needed.Add(path);
             }
             else
             {
                 byPath.TryAdd(path, error.Message + StandsFor(path, solved, derived));
             }
         }
+
+        // The stacking factor comes with the grade.
+        _ = needed.Contains(FormPaths.Grade) && needed.Remove(FormPaths.StackingFactor);
+        Needed = [.. FormLayout.Sections.SelectMany(s => s.Fields).Where(f => needed.Contains(f.Path))];
     }
 
     /// <summary>Messages that no single field can mend.</summary>
     public List<string> General { get; } = [];
 
     /// <summary>Fields that are still to be filled in before there is a first answer.</summary>
-    public List<FormField> Needed { get; } = [];
+    public IReadOnlyList<FormField> Needed { get; }
 
     public IEnumerable<string> Paths => byPath.Keys;
 

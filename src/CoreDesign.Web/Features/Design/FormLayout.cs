@@ -51,7 +51,7 @@ public static class FormLayout
         [
             new(FormPaths.JointType, FieldKind.Choice)
             {
-                Label = "Kind",
+                Label = "Joint kind",
                 Choices = [new("stepLap", "step-lap"), new("mitredOverlap", "mitred overlap"), new("buttLap", "butt-lap")],
             },
             new("joint.positions") { Derivable = true, Step = 1 },

@@ -51,7 +51,7 @@ public sealed record VerdictFigures(VerdictLine Loss, VerdictLine Current, Verdi
 
     private static VerdictLine Margin(string name, double value, double? saved, double peak) =>
         new(name, Figures.Fixed(value, 1), "%", Change(value, saved, 1, "points"), Math.Clamp(value / WidestMargin, 0, 1), null,
-            $"{name}: {Figures.Fixed(peak, 2)} T", value <= 0 ? "saturated" : "", value <= 0);
+            $"{name["at ".Length..]}: {Figures.Fixed(peak, 2)} T", value <= 0 ? "saturated" : "", value <= 0);
 
     private static string? Change(double value, double? saved, int decimals, string unit) =>
         saved is { } before ? $"{Figures.Change(value - before, decimals)} {unit}" : null;
