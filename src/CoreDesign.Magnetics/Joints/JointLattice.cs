@@ -27,7 +27,7 @@ internal sealed class JointLattice
     /// <summary>Largest imbalance of flux left at a node, T.</summary>
     private const double Tolerance_T = 1e-8;
 
-    private readonly SheetLaw _law;
+    private readonly LawAcrossLine _law;
     private readonly JointMesh _mesh;
     private readonly int _cells;
     private readonly int _layers;
@@ -40,7 +40,7 @@ internal sealed class JointLattice
     private readonly LatticeMatrix _matrix;
     private readonly double[] _potential;
 
-    public JointLattice(JointMesh mesh, SheetLaw law, double sheet_m, double exchange_m)
+    public JointLattice(JointMesh mesh, LawAcrossLine law, double sheet_m, double exchange_m)
     {
         (_mesh, _law, _cells, _layers) = (mesh, law, mesh.Widths.Length, mesh.Layers);
         _transfer = new double[_cells + 1];

@@ -78,7 +78,7 @@ public static class JointSolver
         spec.Interface_m + (steel.SheetThickness_m / steel.NormalPermeability);
 
     // Slowest decay along x of a difference between layers, at the steel's highest permeability.
-    private static double Tail(JointSpec spec, JointSteel steel, SheetLaw law, JointGrid grid)
+    private static double Tail(JointSpec spec, JointSteel steel, LawAcrossLine law, JointGrid grid)
     {
         var layers = spec.Positions * spec.SheetsPerPosition;
         var permeability = law.LargestSlope / MagneticConstants.Mu0_H_per_m;

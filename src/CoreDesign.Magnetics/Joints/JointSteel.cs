@@ -31,8 +31,8 @@ public sealed class JointSteel
     /// points between 5 and 100 kA/m make a smooth H(B) rise faster than 1/mu0 in places although every point is sound.
     /// </summary>
     private const double FallTolerance_T = 20e-3;
-    private readonly SheetLaw _square;
-    private readonly SheetLaw _mitred;
+    private readonly LawAcrossLine _square;
+    private readonly LawAcrossLine _mitred;
 
     /// <param name="fieldOfFluxDensity">Peak H in A/m against peak B in T along the rolling direction.</param>
     /// <param name="sheetThickness_m">0.05 mm to 1 mm.</param>
@@ -52,8 +52,8 @@ public sealed class JointSteel
         SheetThickness_m = sheetThickness_m;
         SaturationPolarization_T = saturationPolarization_T;
         RotationStiffness_J_per_m3 = rotationStiffness_J_per_m3;
-        _square = SheetLaw.Tabulate(new RollingDirection(fieldOfFluxDensity, saturationPolarization_T).PolarizationAt);
-        _mitred = SheetLaw.Tabulate(new Turning(_square, saturationPolarization_T, rotationStiffness_J_per_m3).PolarizationAt);
+        _square = LawAcrossLine.Tabulate(new RollingDirection(fieldOfFluxDensity, saturationPolarization_T).PolarizationAt);
+        _mitred = LawAcrossLine.Tabulate(new Turning(_square, saturationPolarization_T, rotationStiffness_J_per_m3).PolarizationAt);
         Fingerprint = Digest();
     }
 
@@ -87,7 +87,7 @@ public sealed class JointSteel
     /// </summary>
     public double FluxDensityAcross(double field_A_per_m, bool mitred) => LawOf(mitred).FluxDensity(field_A_per_m);
 
-    internal SheetLaw LawOf(bool mitred) => mitred ? _mitred : _square;
+    internal LawAcrossLine LawOf(bool mitred) => mitred ? _mitred : _square;
 
     private string Digest()
     {
@@ -160,7 +160,7 @@ public sealed class JointSteel
     /// rolling direction balances Js·H·sin(45° - th) with the torque of a (110)[001] crystal,
     /// K1·sin(2th)·(sin²(th)/2 + cos(2th)).
     /// </summary>
-    private sealed class Turning(SheetLaw alongRolling, double saturation, double stiffness)
+    private sealed class Turning(LawAcrossLine alongRolling, double saturation, double stiffness)
     {
         private double _angle;
 

@@ -8,12 +8,12 @@ internal sealed class WholeLattice
 {
     private const double Mu0 = MagneticConstants.Mu0_H_per_m;
     private readonly JointMesh _half;
-    private readonly SheetLaw _law;
+    private readonly LawAcrossLine _law;
     private readonly double[] _widths;
     private readonly double _transfer;
     private readonly int _layers;
 
-    public WholeLattice(JointMesh half, SheetLaw law, double sheet_m, double exchange_m)
+    public WholeLattice(JointMesh half, LawAcrossLine law, double sheet_m, double exchange_m)
     {
         (_half, _law, _layers) = (half, law, half.Layers);
         _widths = [.. half.Widths, .. half.Widths.Reverse()];

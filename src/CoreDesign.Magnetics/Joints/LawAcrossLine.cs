@@ -5,7 +5,7 @@ namespace CoreDesign.Magnetics.Joints;
 /// over equal steps of ln(1 + H/H1), so that a look-up needs no search and the slope that Newton's method takes is the
 /// exact slope of the value. The slope never falls below mu0.
 /// </summary>
-internal sealed class SheetLaw
+internal sealed class LawAcrossLine
 {
     private const double Mu0 = MagneticConstants.Mu0_H_per_m;
 
@@ -19,7 +19,7 @@ internal sealed class SheetLaw
     private readonly double[] _polarization;
     private readonly double[] _slope;
 
-    private SheetLaw(double[] polarization)
+    private LawAcrossLine(double[] polarization)
     {
         _polarization = polarization;
         _slope = Slopes(polarization);
@@ -36,7 +36,7 @@ internal sealed class SheetLaw
     public IReadOnlyList<double> Polarization => _polarization;
 
     /// <summary>Tabulates a polarization that never falls, called for rising fields in A/m.</summary>
-    public static SheetLaw Tabulate(Func<double, double> polarizationAt)
+    public static LawAcrossLine Tabulate(Func<double, double> polarizationAt)
     {
         var table = new double[Steps + 1];
         for (var k = 1; k <= Steps; k++)
@@ -44,7 +44,7 @@ internal sealed class SheetLaw
             table[k] = polarizationAt(FieldAt(k));
         }
 
-        return new SheetLaw(table);
+        return new LawAcrossLine(table);
     }
 
     public double FluxDensity(double field, out double slope)
