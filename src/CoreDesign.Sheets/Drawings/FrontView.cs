@@ -1,5 +1,4 @@
 using CoreDesign.Estimating.Contracts;
-using CoreDesign.Sheets.Charts;
 using CoreDesign.Sheets.Scenes;
 
 namespace CoreDesign.Sheets.Drawings;
@@ -159,72 +158,34 @@ internal sealed class FrontView
         }
     }
 
-    /// <summary>Where the notes must end above it.</summary>
+    /// <summary>Where the notes must end, above the bar.</summary>
     private double ScaleBar()
     {
         double x = _plan.CalloutX - 14, y = _plan.Core.Bottom - 8;
-        var lengths = new[] { 34.0, 26, 20, 14 }.Select(px => NiceTicks.NiceStep(px / _plan.Scale)).ToArray();
-        var length = Array.Find(lengths, l => x + (2 * l * _plan.Scale) + TextExtent.Width("0000\u00A0mm", _o.TextSize) - 14 <= _o.Width);
-        if (length == 0)
+        if (FrontNotes.ScaleBar(x, y, _plan.Scale, _o) is not { } bar)
         {
             return _plan.Core.Bottom;
         }
 
-        var half = length * _plan.Scale;
-        var end = Figures.With(Figures.Plain(2 * length, 6), "mm");
-        var marks = new List<Mark>
-        {
-            Lines.Rectangle(new(x, y, half, 4), Ink.Ink2, Ink.Ink2, 0.75),
-            Lines.Rectangle(new(x + half, y, half, 4), Paint.None, Ink.Ink2, 0.75),
-            new TextMark(new(x, y - 5), "0", _o.TextSize, Anchor.Start, Ink.Ink2),
-        };
-
-        // The last label ends with its unit beyond the bar; its figure stands at the end of the bar.
-        var last = new TextMark(new(x + (2 * half) - (TextExtent.Width(Figures.Plain(2 * length, 6), _o.TextSize) / 2), y - 5), end, _o.TextSize, Anchor.Start, Ink.Ink2);
-        var middle = new TextMark(new(x + half, y - 5), Figures.Plain(length, 6), _o.TextSize, Anchor.Middle, Ink.Ink2);
-        var box = TextExtent.Of(middle).Grown(4);
-        if (!box.Overlaps(TextExtent.Of(last)) && !box.Overlaps(TextExtent.Of((TextMark)marks[2])))
-        {
-            marks.Add(middle);
-        }
-
-        if (TextExtent.Of(last).Right > _o.Width || TextExtent.Of(last).X < x + 10)
-        {
-            return _plan.Core.Bottom;
-        }
-
-        marks.Add(last);
-        _marks.Add(new GroupMark(marks) { Part = "sb", Label = $"Scale bar, {end}" });
+        _marks.Add(bar);
         return y - _o.TextSize - 8;
     }
 
     private void Cut()
     {
         var limb = _plan.Place(_zones.Last(z => z.Kind == ZoneKind.Limb).Place_mm);
-        double y = limb.Y + (0.76 * limb.Height), size = _o.DimensionSize, window = (_plan.Place(_zones[0].Place_mm).Width, _r.Geometry.WindowWidth_mm * _plan.Scale).Item2;
-        var line = new Box(limb.X, y - 1, limb.Width, 2);
-        var left = new Box(limb.X - 26, y - size - 8, 24, size + 22);
-        var right = new Box(limb.Right + 2, y - size - 8, 24, size + 22);
-        if (limb.Height * 0.24 < 16 || limb.Width < 16 || window < 34 || !IsFree(line.Grown(2)) || !IsFree(left) || !IsFree(right))
+        double y = limb.Y + (0.76 * limb.Height), size = _o.DimensionSize, window = _r.Geometry.WindowWidth_mm * _plan.Scale;
+        Box[] needs =
+        [
+            new Box(limb.X, y - 1, limb.Width, 2).Grown(2),
+            new(limb.X - 26, y - size - 8, 24, size + 22),
+            new(limb.Right + 2, y - size - 8, 24, size + 22),
+        ];
+        if (limb.Height * 0.24 >= 16 && limb.Width >= 16 && window >= 34 && needs.All(IsFree))
         {
-            return;
+            _taken.AddRange(needs);
+            _marks.Add(FrontNotes.Cut(limb, y, size));
         }
-
-        var marks = new List<Mark>
-        {
-            Lines.Line(new(limb.X, y), new(limb.Right, y), Ink.Black, 0.6, Lines.DashDot),
-        };
-        foreach (var (inner, way) in new[] { (limb.X - 4, -1), (limb.Right + 4, 1) })
-        {
-            var at = inner + (way * 8);
-            marks.Add(Lines.Line(new(inner, y), new(inner + (way * 10), y), Ink.Ink, 1.6));
-            marks.Add(Lines.Line(new(at, y), new(at, y + 6), Ink.Ink));
-            marks.Add(Lines.Arrow(new(at, y + 12), 0, 1, Ink.Ink, 7));
-            marks.Add(new TextMark(new(at + (way * 3), y - 5.5), "S", size, way < 0 ? Anchor.End : Anchor.Start, Ink.Ink, Bold: true));
-        }
-
-        _taken.AddRange([line, left, right]);
-        _marks.Add(new GroupMark(marks) { Part = "cut", Label = "Section S–S" });
     }
 
     private void DetailCircle()
