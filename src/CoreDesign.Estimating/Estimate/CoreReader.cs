@@ -30,6 +30,16 @@ internal sealed class CoreReader(DesignResolver resolver)
             return (null, filled);
         }
 
+        if (core.WindowWidth_mm is null)
+        {
+            resolver.Derive("core.windowWidth_mm");
+        }
+
+        if (core.LimbPitch_mm is null)
+        {
+            resolver.Derive("core.limbPitch_mm");
+        }
+
         filled = filled with { WindowWidth_mm = window, LimbPitch_mm = window + (section.Steps[0].Width_m * 1000) };
         try
         {

@@ -84,6 +84,8 @@ public class RefusalTests
         var first = Designs.Solve(Designs.TwoLimb);
         Assert.Contains("joint.gap_mm", first.Derived);
         Assert.Contains("model.buildingFactor", first.Derived);
+        Assert.Contains("core.limbPitch_mm", first.Derived);
+        Assert.DoesNotContain("core.windowWidth_mm", first.Derived);
         Assert.Equal(DesignDefaults.Gap_mm, first.Inputs.Joint!.Gap_mm);
         var again = Designs.Solve(first.Inputs);
         Assert.Equal(first.NoLoadLoss_W, again.NoLoadLoss_W);
