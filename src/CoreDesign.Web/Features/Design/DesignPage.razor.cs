@@ -1,7 +1,5 @@
 using CoreDesign.Estimating.Contracts;
 using CoreDesign.Estimating.LimbSizing;
-using CoreDesign.History.Designs;
-using CoreDesign.History.Model;
 using CoreDesign.Sheets.Drawings;
 using CoreDesign.Web.Components;
 using Microsoft.AspNetCore.Components;
@@ -19,9 +17,6 @@ public sealed partial class DesignPage
     private SizingProposal? sizing;
     private Reading reading;
     private string spoken = "";
-    private SaveDialog? saveDialog;
-    private ConflictDialog? conflictDialog;
-    private SaveWords? words;
     private (long? Id, int? Revision, Guid? Draft, string? Demo)? opened;
     private DotNetObjectReference<DesignPage>? self;
     private IJSObjectReference? script;
@@ -215,42 +210,4 @@ public sealed partial class DesignPage
         await answering;
         Show();
     }
-
-    private async Task AskSave()
-    {
-        if (!State.IsComplete)
-        {
-            await script!.InvokeVoidAsync("focusFirstError");
-            return;
-        }
-
-        await saveDialog!.ShowAsync(session!.Base?.Info.Title ?? string.Join(", ", new[] { State.Typed[FormPaths.Reference], Rating }.Where(t => t.Length > 0)));
-    }
-
-    private async Task<string?> Save(SaveWords given)
-    {
-        words = given;
-        return await SaveAsync(null);
-    }
-
-    private async Task SaveOnTop(int revision) => await SaveAsync(revision);
-
-    private async Task<string?> SaveAsync(int? onTop)
-    {
-        switch (await session!.SaveAsync(words!.Title, words.Note, words.Author, onTop))
-        {
-            case SaveResult.Saved saved:
-                Navigation.NavigateTo($"design/{saved.Revision.Id}", replace: session.Base is null);
-                return null;
-            case SaveResult.Conflict conflict:
-                await conflictDialog!.ShowAsync(conflict.Current, State.SolvedDesign);
-                return null;
-            default:
-                return "This design is no longer in the history. Copy what you need and start a new design.";
-        }
-    }
-
-    private string LeftAddress(Guid key) => Id is { } id ? $"design/{id}?draft={key}" : $"design?draft={key}";
-
-    private void OpenNewest() => Navigation.NavigateTo($"design/{Id}");
 }

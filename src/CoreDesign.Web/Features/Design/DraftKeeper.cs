@@ -40,6 +40,11 @@ public sealed class DraftKeeper(DraftStore store) : IAsyncDisposable
 
     public async ValueTask DisposeAsync()
     {
+        if (closed)
+        {
+            return;
+        }
+
         closed = true;
         await WriteAsync();
         writing.Dispose();

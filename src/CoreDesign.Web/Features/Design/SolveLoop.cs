@@ -77,8 +77,9 @@ public sealed class SolveLoop(DesignEngine engine, DesignPageState state, Action
 
     public void Dispose()
     {
-        running?.Cancel();
-        running?.Dispose();
+        var last = Interlocked.Exchange(ref running, null);
+        last?.Cancel();
+        last?.Dispose();
     }
 
     private async Task StudyAsync(Solving solving, CancellationToken cancel)
