@@ -40,7 +40,7 @@ internal static class SteelChecker
 
         var lossCurves = loss.Select(c => new LossCurve(c.Hz, [.. c.Points.Select(p => new LossPoint(p.B.Value, p.Y.Value))])).ToList();
         var saturation = figures[FieldRule.Saturation.Key]!;
-        return new SteelGrade
+        var grade = new SteelGrade
         {
             Name = draft.Name,
             Class = door.Generation,
@@ -69,6 +69,8 @@ internal static class SteelChecker
             Standing = door.Standing,
             StandingText = door.StandingText,
         };
+        LawRules.Check(grade, door, findings);
+        return findings.ErrorCount > 0 ? null : grade;
     }
 
     private static SourcedFigure? Figure(FieldRule rule, SteelDraft draft, SteelDoor door, Findings findings)
