@@ -1,4 +1,5 @@
 using System.Text.Json;
+using System.Text.Json.Serialization;
 using CoreDesign.Estimating.Contracts;
 using CoreDesign.History.Drafts;
 using CoreDesign.History.Model;
@@ -11,11 +12,28 @@ public sealed record PutDraftRequest
 {
     public long? DesignId { get; init; }
     public int? BaseRevision { get; init; }
+
+    [JsonConverter(typeof(VerbatimJson))]
     public JsonElement? Payload { get; init; }
 }
 
 /// <summary>A draft as it was last put.</summary>
-public sealed record DraftAnswer(Guid Key, long? DesignId, int? BaseRevision, JsonElement Payload, DateTime UpdatedAt);
+public sealed record DraftAnswer(Guid Key, long? DesignId, int? BaseRevision, [property: JsonConverter(typeof(VerbatimJson))] JsonElement Payload, DateTime UpdatedAt);
+
+/// <summary>
+/// Takes JSON as it is and writes it the same. The usual way decodes every text and name, and fails at half of a surrogate
+/// pair, which a half-typed field may well hold.
+/// </summary>
+public sealed class VerbatimJson : JsonConverter<JsonElement>
+{
+    public override JsonElement Read(ref Utf8JsonReader reader, Type typeToConvert, JsonSerializerOptions options) => JsonElement.ParseValue(ref reader);
+
+    public override void Write(Utf8JsonWriter writer, JsonElement value, JsonSerializerOptions options)
+    {
+        ArgumentNullException.ThrowIfNull(writer);
+        writer.WriteRawValue(value.GetRawText());
+    }
+}
 
 /// <summary>Half-filled design pages under keys that the page makes up; whoever knows a key may read and replace its draft.</summary>
 internal static class DraftsApi

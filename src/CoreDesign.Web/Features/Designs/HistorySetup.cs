@@ -1,4 +1,5 @@
 using CoreDesign.History;
+using CoreDesign.Web.Platform;
 using Microsoft.AspNetCore.DataProtection;
 using Microsoft.AspNetCore.DataProtection.KeyManagement;
 using Microsoft.AspNetCore.DataProtection.Repositories;
@@ -20,6 +21,8 @@ public static class HistorySetup
             var settings = services.GetRequiredService<IConfiguration>();
             return HistorySettings.From(settings["CoreDesign:Data"], settings["CoreDesign:Author"]);
         });
+
+        builder.Services.AddHealthChecks().AddCheck<HistoryCheck>("history", tags: [Pages.ReadyTag]);
 
         // Keys in the data folder: what a page has signed stays readable over a restart.
         builder.Services.AddDataProtection().SetApplicationName("CoreDesign");
