@@ -68,7 +68,7 @@ internal static class GeometryTables
     public static Table Mass(EstimateResult e) => Table.KeyValues(
         ("Limbs", Kg(e.Mass_kg.Limbs), false, false),
         ("Yokes", Kg(e.Mass_kg.Yokes), false, false),
-        ("Corners and T-zones", Kg(e.Mass_kg.Corners), false, false),
+        ("Corners and T zones", Kg(e.Mass_kg.Corners), false, false),
         ("Whole core, net steel", Kg(e.Mass_kg.Total), true, false),
         ("Sum over the plates", Kg(e.Geometry.Plates.Sum(p => p.Mass_kg)), false, false));
 
@@ -93,7 +93,7 @@ internal static class GeometryTables
         "limb" => "limbs",
         "yoke" => "yokes",
         "corner" => "corners",
-        "tZone" => "T-zones",
+        "tZone" => "T zones",
         _ => kind,
     };
 

@@ -36,12 +36,8 @@ internal static class Words
         _ => Spaced(shape),
     };
 
-    /// <summary>limbA becomes Limb A, yokeABTop becomes Yoke AB top, tZones become T-zones.</summary>
-    public static string Part(string name)
-    {
-        var spaced = Spaced(name);
-        return spaced.StartsWith("t zone", StringComparison.Ordinal) ? string.Concat("T-", spaced.AsSpan(2)) : Capital(spaced);
-    }
+    /// <summary>limbA becomes Limb A, yokeABTop becomes Yoke AB top, tZones become T zones.</summary>
+    public static string Part(string name) => Capital(Spaced(name));
 
     public static string Capital(string text) =>
         text.Length == 0 || !char.IsLower(text[0]) ? text : char.ToUpper(text[0], CultureInfo.InvariantCulture) + text[1..];

@@ -59,14 +59,8 @@ internal static class CoreZones
 
     public static string Letter(int limb) => ((char)('A' + limb)).ToString();
 
-    /// <summary>Phase letters where every limb has its own, otherwise numbers.</summary>
-    public static string Mark(EstimateResult r, int limb)
-    {
-        var phases = r.Limbs.Select(l => l.Phase).ToArray();
-        return phases.Length == Limbs(r.Geometry) && phases.Distinct(StringComparer.Ordinal).Count() == phases.Length && phases.All(p => p.Length is 1 or 2)
-            ? phases[limb]
-            : (limb + 1).ToString(System.Globalization.CultureInfo.InvariantCulture);
-    }
+    /// <summary>The letter that the limb has in the names of the parts.</summary>
+    public static string Mark(EstimateResult r, int limb) => r.Limbs.Count == Limbs(r.Geometry) ? r.Limbs[limb].Name["limb".Length..] : Letter(limb);
 
     // A result may list each part or lump equal ones; then the place in the list decides, and the first stands for all.
     private static PartResult? Find(EstimateResult r, string kind, string[] names, int place, int places)

@@ -210,7 +210,7 @@ internal sealed class FrontView
 
     private string[] JointNote() => _r.Joint.EffectiveGapUsed
         ? ["Z", "effective gap", Figures.With(Figures.Plain(_r.Inputs.Joint?.EffectiveGap_mm ?? double.NaN, 4), "mm")]
-        : ["Z", "bridging sheet", Figures.With(Figures.Fixed(_r.Joint.BridgingFluxDensity_T, 2), "T") + " normal"];
+        : ["Z", "bridging sheets", Figures.With(Figures.Fixed(_r.Joint.BridgingFluxDensity_T, 2), "T") + " across"];
 
     private double CalloutWidth()
     {

@@ -54,16 +54,6 @@ public sealed class VerdictFiguresTests
     }
 
     [Fact]
-    public void Equal_parts_share_a_row_and_unequal_ones_name_their_limbs()
-    {
-        PartResult Part(string name, string kind, double loss) => new() { Name = name, Kind = kind, Count = 1, Area_mm2 = 100, Length_mm = 10, Mass_kg = 5, PeakFluxDensity_T = 1.6, Loss_W = loss, ExcitingPower_VA = 2 };
-        var rows = PartRow.Of([Part("limbA", "limb", 3), Part("limbB", "limb", 3), Part("yokeABTop", "yoke", 2), Part("yokeABBottom", "yoke", 2), Part("jointATop", "joint", 1), Part("jointBTop", "joint", 4)]);
-
-        Assert.Equal(["Limb A", "Limb B", "Yokes", "Joints A", "Joints B"], rows.Select(r => r.Name));
-        Assert.Equal((2, 4.0, 10.0), (rows[2].Count, rows[2].Loss_W, rows[2].Mass_kg));
-    }
-
-    [Fact]
     public void Two_designs_are_told_apart_field_by_field_in_the_words_of_the_form()
     {
         var theirs = Samples.Input with { Joint = Samples.Input.Joint! with { Gap_mm = 0.5, Type = "buttLap", Overlap_mm = null } };
