@@ -136,6 +136,13 @@ function keydown(event) {
   const mod = event.ctrlKey || event.metaKey;
   if (!mod || event.altKey || document.querySelector('dialog[open]')) return;
   const key = event.key.toLowerCase();
+  if (key === 's' && !event.shiftKey) {
+    const save = document.querySelector('[data-save]');
+    if (!save) return;
+    event.preventDefault();
+    save.click();
+    return;
+  }
   const undo = key === 'z' && !event.shiftKey;
   const redo = (key === 'z' && event.shiftKey) || key === 'y';
   if (!undo && !redo) return;

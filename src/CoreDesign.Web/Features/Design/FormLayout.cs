@@ -8,7 +8,7 @@ public static class FormLayout
     private static readonly Field YokeHeightField = new(FormPaths.YokeHeight, "Yoke height", "h", "mm", 5, 2500,
         "height of the widest yoke plate", "Height of the widest yoke plate; sets the area factor");
 
-    private static readonly Field WantedFluxDensityField = new(FormPaths.WantedFluxDensity, "Wanted flux density", "B", "T", 0.1, 2,
+    private static readonly Field WantedFluxDensityField = new(FormPaths.WantedFluxDensity, "Flux density goal", "B", "T", 0.1, 2,
         "below the saturation of grain-oriented steel", "Peak flux density in the limb at rated voltage; turns and diameter are proposed for it");
 
     public static IReadOnlyList<FormSection> Sections { get; } =
