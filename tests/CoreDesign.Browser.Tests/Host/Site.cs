@@ -20,6 +20,7 @@ public sealed class Site : IAsyncLifetime
     public async ValueTask InitializeAsync()
     {
         if (!File.Exists(Chromium)) throw new InvalidOperationException($"{Chromium} is missing. Run tests/run, which installs it, or: apt-get install chromium");
+        Assertions.SetDefaultExpectTimeout(30_000);
         playwright = await Playwright.CreateAsync();
         Browser = await playwright.Chromium.LaunchAsync(new()
         {
