@@ -1,9 +1,9 @@
 using CoreDesign.Estimating.Contracts;
 using CoreDesign.Estimating.Demo;
-using CoreDesign.Estimating.Estimate;
 using CoreDesign.History.Designs;
 using CoreDesign.History.Drafts;
 using CoreDesign.History.Model;
+using CoreDesign.Web.Features.Designs;
 
 namespace CoreDesign.Web.Features.Design;
 
@@ -39,7 +39,7 @@ public sealed class DesignSession : IAsyncDisposable
     public bool NotFound { get; private set; }
 
     /// <summary>What today's kernel and steel data give for the saved revision; null until known.</summary>
-    public RecheckResult? Today { get; private set; }
+    public RevisionCheck? Today { get; private set; }
 
     /// <summary>A draft that this browser left behind at this address, with its reference; null where there is none.</summary>
     public (Draft Draft, string Reference)? Left { get; private set; }
@@ -79,9 +79,10 @@ public sealed class DesignSession : IAsyncDisposable
         {
             await Loop.RunAsync();
         }
-        else if (Base is { } saved)
+
+        if (Base is { } saved)
         {
-            Today = await Task.Run(() => Recheck.Run(saved.Input, saved.Study.Estimate, engine.Steels()));
+            Today = await Task.Run(() => RevisionCheck.Run(saved, engine.Steels()));
         }
     }
 

@@ -55,7 +55,7 @@ public sealed record RevisionAnswer
 /// <summary>The versions behind a revision's figures, beside today's.</summary>
 public sealed record VersionsAnswer(string Kernel, string SteelData, string TodaysKernel, bool SameKernel);
 
-/// <summary>Today's figures for an old input, and whether they are the old ones to the last digit.</summary>
+/// <summary>Today's figures for an old input, and whether they are the old ones, within 0.005 %.</summary>
 public sealed record TodayAnswer
 {
     public required string KernelVersion { get; init; }

@@ -1,4 +1,5 @@
 using CoreDesign.Estimating.Contracts;
+using CoreDesign.Estimating.Estimate;
 using CoreDesign.History.Designs;
 using CoreDesign.Magnetics;
 using Microsoft.AspNetCore.Http.HttpResults;
@@ -87,31 +88,19 @@ public static class DesignsApi
         });
     }
 
-    private static TodayAnswer Today(RevisionDetail then, Outcome<Study> now)
+    private static TodayAnswer Today(RevisionDetail then, Outcome<Study> solved)
     {
-        if (now.Value?.Estimate is not { } estimate)
-        {
-            return new TodayAnswer
-            {
-                KernelVersion = Kernel.Version,
-                SteelDataRevision = "",
-                SameFigures = false,
-                Refusal = now.Unsolvable?.Reason ?? string.Join(' ', now.Errors.Select(e => $"{e.Path}: {e.Message}")),
-            };
-        }
-
+        var now = RevisionCheck.Of(then, new() { Value = solved.Value?.Estimate, Errors = solved.Errors, Unsolvable = solved.Unsolvable }).Today;
         return new TodayAnswer
         {
-            KernelVersion = estimate.KernelVersion,
-            SteelDataRevision = estimate.SteelDataRevision,
-            NoLoadLoss_W = estimate.NoLoadLoss_W,
-            NoLoadCurrent_percent = estimate.NoLoadCurrent_percent,
-            MarginAtRated_percent = estimate.Margin.AtRated_percent,
-            Mass_kg = estimate.Mass_kg.Total,
-            SameFigures = estimate.NoLoadLoss_W.Equals(then.Info.NoLoadLoss_W)
-                && estimate.NoLoadCurrent_percent.Equals(then.Info.NoLoadCurrent_percent)
-                && estimate.Margin.AtRated_percent.Equals(then.Info.MarginAtRated_percent)
-                && estimate.Mass_kg.Total.Equals(then.Info.Mass_kg),
+            KernelVersion = now.KernelVersion,
+            SteelDataRevision = now.SteelDataRevision ?? "",
+            NoLoadLoss_W = now.NoLoadLoss_W,
+            NoLoadCurrent_percent = now.NoLoadCurrent_percent,
+            MarginAtRated_percent = now.MarginAtRated_percent,
+            Mass_kg = now.Mass_kg,
+            SameFigures = now.Same,
+            Refusal = now.Reason,
         };
     }
 }
