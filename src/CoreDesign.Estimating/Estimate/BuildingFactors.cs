@@ -8,7 +8,7 @@ internal sealed record BuildingFactorValue(double Value, string Source, string S
 
 /// <summary>
 /// Default building factors by form and joint: core W/kg over sheet W/kg at the same flux density, 1.5 to 1.7 T. Priors from memory (three-limb
-/// single overlap 1.15 to 1.30, three-limb step-lap 1.08 to 1.20, single-phase mitred 1.05 to 1.12), of which the middle is taken; the range 1.08 to 1.35 for
+/// single overlap 1.15 to 1.30, three-limb step-lap 1.08 to 1.20, single-phase mitred 1.05 to 1.12), of which the middle is taken, or the lower end for single-phase step-lap; the range 1.08 to 1.35 for
 /// three-limb cores and 5 to 8 % less for step-lap than for others were read in a paper of 2008. A works replaces them by its own.
 /// </summary>
 internal static class BuildingFactors
@@ -26,10 +26,15 @@ internal static class BuildingFactors
             (_, JointKind.MitredOverlap) => 1.09,
             _ => 1.20,
         };
-        var basis = joint == JointKind.ButtLap
-            ? "upper end of the published range for square joints"
-            : "middle of the usual range for this form and joint";
-        return new BuildingFactorValue(value, $"Default building factor {value:0.00}: {basis}, a prior from memory. Replace by your works' own.", FromMemory);
+        var basis = (form, joint) switch
+        {
+            (CoreForm.ThreeLimb, JointKind.ButtLap) => "upper end of the range published for three-limb cores, 1.08 to 1.35",
+            (_, JointKind.ButtLap) => "a guess without a source",
+            (CoreForm.ThreeLimb, _) => "middle of the usual range for this form and joint, a prior from memory",
+            (_, JointKind.StepLap) => "lower end of the usual range for two-limb cores, a prior from memory",
+            _ => "middle of the usual range for two-limb cores, a prior from memory",
+        };
+        return new BuildingFactorValue(value, $"Default building factor {value:0.00}: {basis}. Replace by your works' own.", FromMemory);
     }
 
     public static BuildingFactorValue Given(double value) =>
