@@ -63,7 +63,7 @@ public static class Places
         new("import-good", "/steels/import") { Enter = v => PasteAsync(v, Records.Certificate("Good certificate")) },
         new("import-warned", "/steels/import") { Enter = v => PasteAsync(v, Records.Certificate("Certificate without density").Replace("density_kg_m3,7650\n", "", StringComparison.Ordinal)) },
         new("import-errors", "/steels/import") { Enter = v => PasteAsync(v, Records.BrokenCertificate) },
-        .. Chapters("order", "steels", "geometry", "joints", "solver", "building-factor", "sheet", "files", "api", "cautions"),
+        .. Chapters("order", "steels", "geometry", "joints", "solver", "building-factor", "sheet", "files", "circuits", "api", "cautions"),
         new("handbook-missing", "/handbook/no-such-chapter"),
         new("not-found", "/no/such/page") { Expected = Missing },
         new("error", "/error"),

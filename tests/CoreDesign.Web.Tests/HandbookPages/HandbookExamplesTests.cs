@@ -2,7 +2,9 @@ using System.Net;
 using System.Net.Http.Json;
 using System.Text;
 using System.Text.Json;
+using CoreDesign.Estimating.Circuits;
 using Microsoft.AspNetCore.Hosting;
+using Microsoft.AspNetCore.Http.Metadata;
 using Microsoft.AspNetCore.Mvc.Testing;
 using Microsoft.AspNetCore.Routing;
 using Microsoft.Extensions.DependencyInjection;
@@ -79,6 +81,29 @@ public sealed class HandbookExamplesTests : IDisposable
             .SelectMany(e => (e.Metadata.GetMetadata<HttpMethodMetadata>()?.HttpMethods ?? ["GET"]).Select(m => $"{m} {e.RoutePattern.RawText!.TrimEnd('/')}"));
 
         Assert.Equal(real.Order(StringComparer.Ordinal), HandbookText.Table("api", "API").Select(r => r[0]).Order(StringComparer.Ordinal));
+    }
+
+    [Fact]
+    public void Limits_of_a_circuit_are_those_of_the_endpoint()
+    {
+        var endpoint = service.Services.GetRequiredService<EndpointDataSource>().Endpoints.OfType<RouteEndpoint>().Single(e => e.RoutePattern.RawText == "/api/circuits");
+        var description = endpoint.Metadata.GetMetadata<IEndpointDescriptionMetadata>()!.Description;
+        var text = HandbookText.Of("circuits");
+
+        Assert.StartsWith("At most 200 branches and 12 windings, 20 s.", description, StringComparison.Ordinal);
+        Assert.Contains("| 1 to 200;", text, StringComparison.Ordinal);
+        Assert.Contains("| 1 to 12;", text, StringComparison.Ordinal);
+        Assert.Contains("A solve ends after 20 s.", text, StringComparison.Ordinal);
+        Assert.Contains(FormattableString.Invariant($"{SolveCircuit.DefaultPoints} if left out"), text, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void Members_of_a_circuit_are_those_that_are_read()
+    {
+        var read = JsonSerializer.SerializeToNode(new CircuitCase(), JsonSerializerOptions.Web)!.AsObject().Select(m => m.Key);
+        var told = HandbookText.Table("circuits", "Members").SelectMany(r => r[0].Split(',')).Select(n => n.Trim(' ', '`'));
+
+        Assert.Equal(read.Order(StringComparer.Ordinal), told.Concat(["tolerance", "agreement", "methods"]).Order(StringComparer.Ordinal));
     }
 
     [Fact]
