@@ -60,9 +60,9 @@ public static class Places
         new("steel-own", $"/steels/{Records.OwnSteel}"),
         new("steel-missing", "/steels/M105-30X"),
         new("import", "/steels/import"),
-        new("import-good", "/steels/import") { Enter = v => PasteAsync(v, Records.Certificate("Good certificate")) },
-        new("import-warned", "/steels/import") { Enter = v => PasteAsync(v, Records.Certificate("Certificate without density").Replace("density_kg_m3,7650\n", "", StringComparison.Ordinal)) },
-        new("import-errors", "/steels/import") { Enter = v => PasteAsync(v, Records.BrokenCertificate) },
+        new("import-good", "/steels/import") { Enter = v => PasteAsync(v, Records.Certificate("Good certificate"), "Good certificate, as it would be kept") },
+        new("import-warned", "/steels/import") { Enter = v => PasteAsync(v, Records.Certificate("Certificate without density").Replace("density_kg_m3,7650\n", "", StringComparison.Ordinal), "Worth a look") },
+        new("import-errors", "/steels/import") { Enter = v => PasteAsync(v, Records.BrokenCertificate, "270") },
         .. Chapters("order", "steels", "geometry", "joints", "solver", "building-factor", "sheet", "files", "circuits", "api", "cautions"),
         new("handbook-missing", "/handbook/no-such-chapter"),
         new("not-found", "/no/such/page") { Expected = Missing },
@@ -173,10 +173,10 @@ public static class Places
         await Expect(v.Page.Locator("#components-reconnect-modal .fail")).ToBeVisibleAsync();
     }
 
-    private static async Task PasteAsync(Visitor v, string text)
+    private static async Task PasteAsync(Visitor v, string text, string answer)
     {
         await v.Page.Locator("#paste").FillAsync(text);
         await v.Page.GetByRole(AriaRole.Button, new() { Name = "Check the text" }).ClickAsync();
-        await Expect(v.Page.Locator(".result")).ToBeVisibleAsync();
+        await Expect(v.Page.Locator(".result")).ToContainTextAsync(answer);
     }
 }

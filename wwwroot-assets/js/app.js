@@ -7,6 +7,8 @@ window.coreDesign = {
     heading.setAttribute('tabindex', '-1');
     heading.focus({ preventScroll: true });
   },
+  // From now on presses and keys are answered; before, the page is a picture of itself.
+  live() { document.documentElement.dataset.live = 'true'; },
   // Focus a field and select what is in it; used where a dimension on a drawing is pressed.
   focusField(id) {
     const field = document.getElementById(id);

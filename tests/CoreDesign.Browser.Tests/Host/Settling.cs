@@ -5,14 +5,10 @@ namespace CoreDesign.Browser.Tests.Host;
 /// <summary>Waiting for what a page itself shows, never for a time.</summary>
 internal static class Settling
 {
-    // The server's markers for parts that are not yet live stand in comments until the line to the server is up.
+    // The page says so itself, once its parts were painted over the line to the server; what is typed before is lost.
     private const string IsLive = """
-        () => {
-          if (document.readyState !== 'complete' || document.fonts.status !== 'loaded') return false;
-          const walker = document.createTreeWalker(document, NodeFilter.SHOW_COMMENT);
-          while (walker.nextNode()) if (/^Blazor:\{.*"type":"server"/.test(walker.currentNode.data)) return false;
-          return !document.querySelector('.loading');
-        }
+        () => document.readyState === 'complete' && document.fonts.status === 'loaded'
+          && document.documentElement.dataset.live === 'true' && !document.querySelector('.loading')
         """;
 
     private const string IsAnswered = """

@@ -18,9 +18,9 @@ public sealed class SteelImportHostileTests
     {
         using var stream = new CountingStream(10 * 1024 * 1024);
         var preview = await SteelImport.ReadAsync(stream, "big.csv", TestContext.Current.CancellationToken);
-        Assert.Equal("The file: has more than 2097152 bytes; a certificate needs a few hundred lines. Leave other data out.", OnlyError(preview));
+        Assert.Equal("The file has more than 2097152 bytes; a certificate needs a few hundred lines. Leave other data out.", OnlyError(preview));
         Assert.Equal(SteelImport.MaxBytes + 1, stream.Position);
-        Assert.Equal("The text: has more than 2097152 characters; a certificate needs a few hundred lines. Leave other data out.", OnlyError(SteelImport.Read(new string('x', 10_000_000), null)));
+        Assert.Equal("The text has more than 2097152 characters; a certificate needs a few hundred lines. Leave other data out.", OnlyError(SteelImport.Read(new string('x', 10_000_000), null)));
     }
 
     [Fact]
@@ -33,20 +33,20 @@ public sealed class SteelImportHostileTests
     [Fact]
     public void Binary_content_is_refused_by_kind()
     {
-        const string Workbook = "The file: is a workbook, archive or PDF, not text; save the table as CSV and import that.";
+        const string Workbook = "The file is a workbook, archive or PDF, not text; save the table as CSV and import that.";
         Assert.Equal(Workbook, OnlyError(SteelImport.Read("PK\u0003\u0004"u8, "a.xlsx")));
         Assert.Equal(Workbook, OnlyError(SteelImport.Read("%PDF-1.7"u8, null)));
         Assert.Equal(
-            "Line 2, The file: holds the control character U+0000, so it is binary or in an encoding without its mark; save it as CSV, UTF-8.",
+            "Line 2: the file holds the control character U+0000, so it is binary or in an encoding without its mark; save it as CSV, UTF-8.",
             OnlyError(SteelImport.Read("name,x\nsou\0rce,y"u8, null)));
         Assert.Equal(
-            "Line 1, The file: holds the control character U+0000, so it is binary or in an encoding without its mark; save it as CSV, UTF-8.",
+            "Line 1: the file holds the control character U+0000, so it is binary or in an encoding without its mark; save it as CSV, UTF-8.",
             OnlyError(SteelImport.Read(Encoding.Unicode.GetBytes(Good), null)));
         Assert.Equal(
-            "Line 1, The file: holds the control character U+0000, so it is binary or in an encoding without its mark; save it as CSV, UTF-8.",
+            "Line 1: the file holds the control character U+0000, so it is binary or in an encoding without its mark; save it as CSV, UTF-8.",
             OnlyError(SteelImport.Read([.. Encoding.UTF32.GetPreamble(), .. Encoding.UTF32.GetBytes(Good)], null)));
-        Assert.Equal("The file: is empty; start from the template.", OnlyError(SteelImport.Read(""u8, null)));
-        Assert.Equal("The file: is empty; start from the template.", OnlyError(SteelImport.Read(" \r\n\t"u8, null)));
+        Assert.Equal("The file is empty; start from the template.", OnlyError(SteelImport.Read(""u8, null)));
+        Assert.Equal("The file is empty; start from the template.", OnlyError(SteelImport.Read(" \r\n\t"u8, null)));
     }
 
     [Fact]
@@ -85,7 +85,7 @@ public sealed class SteelImportHostileTests
     public void Page_of_markup_is_no_table()
     {
         Assert.Equal(
-            "The file: has no header row of a table; it needs a row with the columns kind, frequency_Hz, B_T, value, separated by comma, semicolon or tab.",
+            "The file has no header row of a table; it needs a row with the columns kind, frequency_Hz, B_T, value, separated by comma, semicolon or tab.",
             OnlyError(SteelImport.Read("<html><body><script>alert(1)</script></body></html>"u8, "x.html")));
     }
 
@@ -113,7 +113,7 @@ public sealed class SteelImportHostileTests
             .Replace("loss,50,1,0.335", "loss,50,1,x", StringComparison.Ordinal);
         var preview = SteelImport.Read(text, null);
         Assert.Contains(
-            "Line 6, The row: has a line break within quotation marks; keep each cell on one line, and double a quotation mark that belongs to the text.",
+            "Line 6: the row has a line break within quotation marks; keep each cell on one line, and double a quotation mark that belongs to the text.",
             preview.Errors.Select(e => e.Message));
         var line = text.ReplaceLineEndings("\n").Split('\n').ToList().FindIndex(l => l == "loss,50,1,x") + 1;
         Assert.Contains(line, preview.Errors.Select(e => e.Line ?? 0));
@@ -153,7 +153,7 @@ public sealed class SteelImportHostileTests
     {
         var preview = SteelImport.Read(Good.Replace("Example steel coil 0001", "a\u0085b", StringComparison.Ordinal), null);
         Assert.Equal(
-            "Line 6, The file: holds the control character U+0085, so it is binary or in an encoding without its mark; save it as CSV, UTF-8.",
+            "Line 6: the file holds the control character U+0085, so it is binary or in an encoding without its mark; save it as CSV, UTF-8.",
             OnlyError(preview));
     }
 

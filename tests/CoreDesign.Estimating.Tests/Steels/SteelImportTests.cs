@@ -87,7 +87,7 @@ public sealed class SteelImportTests
         var preview = SteelImport.Read(Encoding.Latin1.GetBytes(Sample), null);
         Assert.Equal("Bänder Nr. 17/3", preview.Grade!.Name);
         Assert.Equal(
-            "The file: is not UTF-8 and was read as Latin-1; check the name for odd letters, or save it as CSV, UTF-8.",
+            "The file is not UTF-8 and was read as Latin-1; check the name for odd letters, or save it as CSV, UTF-8.",
             Assert.Single(preview.Warnings).Message);
     }
 
@@ -132,10 +132,10 @@ public sealed class SteelImportTests
     [InlineData("Bänder Nr. 17/3", "a\u202Eb", "Line 2, name: \"a\u202Eb\" holds control or invisible characters; type it again as plain text.")]
     [InlineData("kind;frequency_Hz;B_T;value", "kind;f;B_T;value", "Line 10, header: lacks the column frequency_Hz.")]
     [InlineData("kind;frequency_Hz;B_T;value", "kind;f;B_T;value", "Line 10, header: \"f\" is no column of the format; the columns are kind, frequency_Hz, B_T, value.")]
-    [InlineData("kind;frequency_Hz;B_T;value", "kind;frequency_Hz;J_T;value", "The file: has no header row of a table; it needs a row with the columns kind, frequency_Hz, B_T, value, separated by comma, semicolon or tab.")]
+    [InlineData("kind;frequency_Hz;B_T;value", "kind;frequency_Hz;J_T;value", "The file has no header row of a table; it needs a row with the columns kind, frequency_Hz, B_T, value, separated by comma, semicolon or tab.")]
     [InlineData("loss;50;1,0;0,315", "los;50;1,0;0,315", "Line 21, kind: \"los\" is no kind of table; nearest: loss. Kinds are magnetization, loss, excitingPower.")]
     [InlineData("loss;50;1,0;0,315", "loss;;1,0;0,315", "Line 21, frequency_Hz: \"\" is empty; give the number or leave the whole row out.")]
-    [InlineData("loss;50;1,0;0,315", "loss;50;1,0;0,315;9", "Line 21, The row: has 5 cells where the header has 4; leave the cells after the last column empty.")]
+    [InlineData("loss;50;1,0;0,315", "loss;50;1,0;0,315;9", "Line 21: the row has 5 cells where the header has 4; leave the cells after the last column empty.")]
     [InlineData("loss;50;1,0;0,315", "loss;5;1,0;0,315", "Line 21, frequency_Hz: \"5\" must be a frequency from 10 to 1000 Hz; check the column.")]
     [InlineData("loss;50;1,0;0,315", "loss;50;1,0;-0,315", "Line 21, value: \"-0,315\" must be a loss from 0.000001 to 200 W/kg; leave the row out where nothing was measured.")]
     [InlineData("loss;50;1,0;0,315", "loss;50;-1,0;0,315", "Line 21, B_T: \"-1,0\" must be a peak flux density from 0.001 to 2.2 T; peak values are above zero; leave this row out.")]
@@ -226,7 +226,7 @@ public sealed class SteelImportTests
     public void Decimal_commas_in_a_comma_separated_file_are_explained()
     {
         var preview = SteelImport.Read(Sample.Replace(';', ','), null);
-        AssertError(preview, "Line 12, The row: has 6 cells where the header has 4; decimal commas need semicolons or tabs between the cells.");
+        AssertError(preview, "Line 12: the row has 6 cells where the header has 4; decimal commas need semicolons or tabs between the cells.");
         AssertError(preview, "Line 4, thickness_mm: has 2 values; put a text with commas in quotation marks, and write decimal points.");
     }
 

@@ -102,11 +102,14 @@ public static class SteelImport
         var (line, column, _) = finding.Spot;
         var where = line > 0 ? $"Line {line}, {column}" : column;
         var value = finding.ShownValue;
-        return new ImportProblem(
-            line > 0 ? line : null,
-            column.StartsWith("The ", StringComparison.Ordinal) ? null : column,
-            value,
-            value is null ? $"{where}: {finding.Rule}" : $"{where}: \"{value}\" {finding.Rule}");
+        var ofFile = column.StartsWith("The ", StringComparison.Ordinal);
+        var message = (ofFile, value) switch
+        {
+            (true, null) => line > 0 ? $"Line {line}: the {column[4..]} {finding.Rule}" : $"{column} {finding.Rule}",
+            (_, null) => $"{where}: {finding.Rule}",
+            _ => $"{where}: \"{value}\" {finding.Rule}",
+        };
+        return new ImportProblem(line > 0 ? line : null, ofFile ? null : column, value, message);
     }
 
     /// <summary>A file name comes from outside; only its printable last part is kept.</summary>
