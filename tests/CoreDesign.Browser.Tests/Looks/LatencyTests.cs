@@ -28,8 +28,12 @@ public sealed class LatencyTests(Site site) : BrowserTest(site)
             if (from === null || page.dataset.serial !== page.dataset.answered) return;
             const began = from;
             from = null;
-            // The second frame begins after the first, with the new verdict, was painted.
-            requestAnimationFrame(() => requestAnimationFrame(() => window.waits.push(performance.now() - began)));
+            // The frame that shows the new verdict is painted between its callback and the next task.
+            requestAnimationFrame(() => {
+              const painted = new MessageChannel();
+              painted.port1.onmessage = () => window.waits.push(performance.now() - began);
+              painted.port2.postMessage(null);
+            });
           }).observe(page, { attributes: true, attributeFilter: ['data-serial', 'data-answered'] });
         }
         """;

@@ -58,6 +58,18 @@ public sealed class SolveLoopTests
     }
 
     [Fact]
+    public async Task Edit_while_nothing_is_answered_waits_for_no_pause()
+    {
+        var state = new DesignPageState();
+        state.Load(FormReader.Texts(Samples.Input));
+        using var loop = new SolveLoop(Engine(), state, () => { }) { Pause = TimeSpan.FromHours(1), Rest = TimeSpan.Zero };
+
+        await loop.RunAsync().WaitAsync(TimeSpan.FromMinutes(1), TestContext.Current.CancellationToken);
+
+        Assert.NotNull(state.Estimate);
+    }
+
+    [Fact]
     public async Task Refused_design_solves_no_levers()
     {
         var state = new DesignPageState();

@@ -10,7 +10,7 @@ public sealed class SolveLoop(DesignEngine engine, DesignPageState state, Action
 {
     private CancellationTokenSource? running;
 
-    /// <summary>Keystrokes closer than this are one edit.</summary>
+    /// <summary>Keystrokes that come while an edit is being answered and closer than this are one edit; the first of them is answered at once.</summary>
     public TimeSpan Pause { get; init; } = TimeSpan.FromMilliseconds(40);
 
     /// <summary>How long nothing must be typed before levers and curve are solved, which takes the processor from the next edit.</summary>
@@ -31,12 +31,17 @@ public sealed class SolveLoop(DesignEngine engine, DesignPageState state, Action
         }
 
         var cancel = own.Token;
+        var answering = IsEstimating;
         var solving = state.Begin();
         try
         {
             IsStudying = false;
             IsEstimating = true;
-            await Task.Delay(Pause, cancel);
+            if (answering)
+            {
+                await Task.Delay(Pause, cancel);
+            }
+
             var design = SizingAid.Complete(solving.Request.Design, solving.Request.YokeHeight_mm, solving.Request.WantedFluxDensity_T, engine.Steels());
             var outcome = await Task.Run(() => engine.Estimate(design, cancel), cancel);
             if (!state.Accept(solving, design, outcome))
