@@ -28,6 +28,9 @@ public static class HistoryWords
         _ => form,
     };
 
+    /// <summary>A rating that breaks between its parts, never between a number and its unit.</summary>
+    public static string Rating(string rating) => rating.Replace(" k", "\u00a0k", StringComparison.Ordinal).Replace(" M", "\u00a0M", StringComparison.Ordinal);
+
     public static string Date(DateTime utc) => utc.ToString("yyyy-MM-dd", CultureInfo.InvariantCulture);
 
     public static string Time(DateTime utc) => utc.ToString("HH:mm", CultureInfo.InvariantCulture);
