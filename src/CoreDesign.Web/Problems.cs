@@ -1,5 +1,7 @@
 using CoreDesign.Estimating.Contracts;
+using Microsoft.AspNetCore.Diagnostics;
 using Microsoft.AspNetCore.Http.HttpResults;
+using Microsoft.AspNetCore.Http.Metadata;
 using Microsoft.AspNetCore.Mvc;
 
 namespace CoreDesign.Web;
@@ -7,6 +9,8 @@ namespace CoreDesign.Web;
 /// <summary>Everything the API refuses leaves as problem details (RFC 9457), in the same words as on the page.</summary>
 public static class Problems
 {
+    private const int MostErrors = 100;
+
     /// <summary>The answer to an outcome: 200 with the value, 400 with every field's message, or 422 with reason and residual.</summary>
     public static Results<Ok<T>, ProblemHttpResult> ToResult<T>(this Outcome<T> outcome)
         where T : class =>
@@ -25,6 +29,8 @@ public static class Problems
     /// <summary>400: unreadable or out of range. One entry per path, in the order found.</summary>
     public static ProblemHttpResult Refused(IReadOnlyList<FieldError> errors, string prefix = "")
     {
+        if (errors.Count > MostErrors)
+            errors = [.. errors.Take(MostErrors), new FieldError("$", $"And {errors.Count - MostErrors} more. Mend these first.")];
         var byPath = errors
             .GroupBy(e => Under(prefix, e.Path), StringComparer.Ordinal)
             .ToDictionary(g => g.Key, g => g.Select(e => e.Message).ToArray(), StringComparer.Ordinal);
@@ -63,7 +69,8 @@ public static class Problems
     public static void AddProblems(this WebApplicationBuilder builder)
     {
         ArgumentNullException.ThrowIfNull(builder);
-        builder.Services.AddProblemDetails();
+        builder.Services.AddProblemDetails(o => o.CustomizeProblemDetails = context =>
+            context.ProblemDetails.Detail ??= MendOf(context.ProblemDetails.Status, context.HttpContext.Request));
         builder.Services.ConfigureHttpJsonOptions(o => DesignJson.Configure(o.SerializerOptions));
     }
 
@@ -75,13 +82,34 @@ public static class Problems
             context => context.Request.Path.StartsWithSegments("/api", StringComparison.OrdinalIgnoreCase),
             api =>
             {
-                api.UseExceptionHandler(failed => failed.Run(context => Plain(
-                    StatusCodes.Status500InternalServerError,
-                    "The service failed.",
-                    "An error of the service, not of the request; nothing was stored. The service's log holds the details.").ExecuteAsync(context)));
+                api.UseExceptionHandler(failed => failed.Run(context => Failure(context).ExecuteAsync(context)));
                 api.UseStatusCodePages();
             });
     }
+
+    private static ProblemHttpResult Failure(HttpContext context) =>
+        context.Features.Get<IExceptionHandlerFeature>()?.Error is BadHttpRequestException unreadable
+            ? Plain(
+                unreadable.StatusCode,
+                "The request can't be read.",
+                unreadable.StatusCode == StatusCodes.Status408RequestTimeout
+                    ? "The body came too slowly. Send it again over a better line."
+                    : "The body broke off, or does not come in the form that its headers say. Send it again whole.")
+            : Plain(
+                StatusCodes.Status500InternalServerError,
+                "The service failed.",
+                "An error of the service, not of the request; nothing was stored. The service's log holds the details.");
+
+    private static string? MendOf(int? status, HttpRequest request) => status switch
+    {
+        StatusCodes.Status404NotFound => "Nothing answers at this address. /openapi/v1.json lists the addresses and their methods.",
+        StatusCodes.Status405MethodNotAllowed => $"{Shown(request.Method)} is not possible at this address. /openapi/v1.json lists the methods.",
+        StatusCodes.Status415UnsupportedMediaType =>
+            $"The content type is '{Shown(request.ContentType ?? "")}'; here it must be {string.Join(" or ", request.HttpContext.GetEndpoint()?.Metadata.GetMetadata<IAcceptsMetadata>()?.ContentTypes ?? [request.Path.StartsWithSegments("/api/steels", StringComparison.OrdinalIgnoreCase) ? "text/csv" : "application/json"])}.",
+        _ => null,
+    };
+
+    private static string Shown(string text) => text.Length <= 40 ? text : text[..40] + "…";
 
     private static string Under(string prefix, string path) =>
         prefix.Length == 0 ? path

@@ -11,17 +11,22 @@ namespace CoreDesign.Estimating.Contracts;
 internal static class JsonShape
 {
     private const int ShownValueLength = 40;
+    private const int LongestName = 100;
+
+    /// <summary>Past this the rest is not read: nobody mends more at once, and a body of misfits must not become an answer of megabytes.</summary>
+    private const int MostErrors = 100;
 
     public static IReadOnlyList<FieldError> Check(JsonElement root, JsonTypeInfo type)
     {
         var errors = new List<FieldError>();
         Walk(root, type, "", errors);
-        return errors;
+        if (errors.Count < MostErrors) return errors;
+        return [.. errors.Take(MostErrors), new FieldError("$", $"There are {MostErrors} misfits or more; only these are listed. Mend them and send again.")];
     }
 
     private static void Walk(JsonElement element, JsonTypeInfo type, string path, List<FieldError> errors)
     {
-        if ((Nullable.GetUnderlyingType(type.Type) ?? type.Type) == typeof(JsonElement)) return;
+        if (errors.Count >= MostErrors || (Nullable.GetUnderlyingType(type.Type) ?? type.Type) == typeof(JsonElement)) return;
         if (element.ValueKind == JsonValueKind.Null)
         {
             // A null member counts as left out; the root and the entries of a list must be there.
@@ -47,8 +52,9 @@ internal static class JsonShape
                 var names = new HashSet<string>(StringComparer.Ordinal);
                 foreach (var member in element.EnumerateObject())
                 {
-                    var memberPath = path.Length == 0 ? member.Name : $"{path}.{member.Name}";
-                    if (!names.Add(member.Name)) errors.Add(new FieldError(memberPath, $"'{Cut(member.Name)}' is given twice. Give it once."));
+                    if (NameOf(member, path, errors) is not { } name) continue;
+                    var memberPath = Under(path, name);
+                    if (!names.Add(name)) errors.Add(new FieldError(memberPath, $"'{Cut(name)}' is given twice. Give it once."));
                     Walk(member.Value, type.Options.GetTypeInfo(type.ElementType!), memberPath, errors);
                 }
 
@@ -72,18 +78,9 @@ internal static class JsonShape
         var seen = new HashSet<string>(StringComparer.Ordinal);
         foreach (var member in element.EnumerateObject())
         {
-            string name;
-            try
-            {
-                name = member.Name;
-            }
-            catch (InvalidOperationException)
-            {
-                errors.Add(new FieldError(path.Length == 0 ? "$" : path, "A member's name holds half of a surrogate pair and can't be read."));
-                continue;
-            }
-
-            var memberPath = path.Length == 0 ? name : $"{path}.{name}";
+            if (errors.Count >= MostErrors) return;
+            if (NameOf(member, path, errors) is not { } name) continue;
+            var memberPath = Under(path, name);
             var property = type.Properties.FirstOrDefault(p => string.Equals(p.Name, name, StringComparison.Ordinal));
             if (property is null)
                 errors.Add(new FieldError(memberPath, UnknownMember(name, type)));
@@ -94,8 +91,27 @@ internal static class JsonShape
         }
 
         foreach (var missing in type.Properties.Where(p => p.IsRequired && !seen.Contains(p.Name)))
-            errors.Add(new FieldError(path.Length == 0 ? missing.Name : $"{path}.{missing.Name}", $"'{missing.Name}' is missing."));
+            errors.Add(new FieldError(Under(path, missing.Name), $"'{missing.Name}' is missing."));
     }
+
+    /// <summary>The member's name, or null, with the error said, where it can't be decoded or is no name any more.</summary>
+    private static string? NameOf(JsonProperty member, string path, List<FieldError> errors)
+    {
+        var place = path.Length == 0 ? "$" : path;
+        try
+        {
+            if (member.Name.Length <= LongestName) return member.Name;
+            errors.Add(new FieldError(place, $"A member's name has {member.Name.Length} characters; at most {LongestName}. It begins with '{Cut(member.Name)}'."));
+        }
+        catch (InvalidOperationException)
+        {
+            errors.Add(new FieldError(place, "A member's name holds half of a surrogate pair and can't be read."));
+        }
+
+        return null;
+    }
+
+    private static string Under(string path, string name) => path.Length == 0 ? name : $"{path}.{name}";
 
     private static string UnknownMember(string name, JsonTypeInfo type)
     {

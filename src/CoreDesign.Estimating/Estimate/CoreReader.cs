@@ -101,6 +101,12 @@ internal sealed class CoreReader(DesignResolver resolver)
 
     private StepSet? Typed(IReadOnlyList<StepInput> typed)
     {
+        if (typed.Count > StepSet.MostSteps)
+        {
+            resolver.Say("core.limbSteps", $"{typed.Count} steps are given; at most {StepSet.MostSteps}. Give one line for each plate width.");
+            return null;
+        }
+
         var steps = new List<LimbStep>();
         for (var i = 0; i < typed.Count; i++)
         {
@@ -127,6 +133,12 @@ internal sealed class CoreReader(DesignResolver resolver)
     private StepSet? FromCircle(LimbInput limb)
     {
         var diameter = resolver.Needed("core.limb.diameter_mm", limb.Diameter_mm);
+        if (limb.StockWidths_mm?.Count > StepOptimizer.MostStockWidths)
+        {
+            resolver.Say("core.limb.stockWidths_mm", $"{limb.StockWidths_mm.Count} widths are given; at most {StepOptimizer.MostStockWidths}. Give the widths that the works slits.");
+            return null;
+        }
+
         if (limb.StockWidths_mm is { Count: > 0 } stock)
         {
             var before = resolver.Errors.Count;
@@ -211,14 +223,15 @@ internal sealed class CoreReader(DesignResolver resolver)
             }
 
             var before = resolver.Errors.Count;
-            for (var i = 0; i < own.Count; i++)
-            {
-                resolver.Needed(string.Create(CultureInfo.InvariantCulture, $"core.yoke.stepWidths_mm[{i}]"), own[i]);
-            }
-
             if (own.Count != section.Steps.Count)
             {
                 resolver.Say("core.yoke.stepWidths_mm", $"{own.Count} yoke widths for {section.Steps.Count} limb steps. Give one for each step.");
+                return null;
+            }
+
+            for (var i = 0; i < own.Count; i++)
+            {
+                resolver.Needed(string.Create(CultureInfo.InvariantCulture, $"core.yoke.stepWidths_mm[{i}]"), own[i]);
             }
 
             return resolver.Errors.Count > before ? null : section.WithYokes([.. own.Select(w => w / 1000)]);

@@ -2,6 +2,7 @@ using System.Globalization;
 using CoreDesign.Estimating.Contracts;
 using CoreDesign.Estimating.Fields;
 using CoreDesign.Estimating.Steels;
+using CoreDesign.Estimating.Steels.Checks;
 using CoreDesign.Magnetics.Circuits;
 using CoreDesign.Magnetics.Geometry;
 using CoreDesign.Magnetics.Joints;
@@ -11,6 +12,7 @@ namespace CoreDesign.Estimating.Estimate;
 /// <summary>Checks a design, takes defaults for what is open and converts to SI. Collects every error; nothing is corrected silently.</summary>
 internal sealed class DesignResolver(DesignInput input, SteelCatalog steels)
 {
+    private const int MostVoltages = 6;
     private readonly List<FieldError> _errors = [];
     private readonly List<string> _derived = [];
     private readonly List<NoteResult> _warnings = [];
@@ -37,6 +39,11 @@ internal sealed class DesignResolver(DesignInput input, SteelCatalog steels)
         var steel = Steel();
         var (joint, effectiveGap, filledJoint) = new JointReader(this).Read(input.Joint);
         var (geometry, filledCore) = new CoreReader(this).Read(core, form, steel, joint?.Kind ?? JointKind.StepLap);
+        if (geometry is not null && joint is not null && JointFit.Check(joint, geometry.Steps[0]) is { } misfit)
+        {
+            Say("joint.overlap_mm", misfit);
+        }
+
         var building = Building(form, joint?.Kind);
         var temperature = Optional("model.temperature_C", input.Model?.Temperature_C, DesignDefaults.Temperature_C);
         if (_errors.Count > 0 || geometry is null || steel is null || joint is null || form is null || connection is null || building is null)
@@ -121,6 +128,16 @@ internal sealed class DesignResolver(DesignInput input, SteelCatalog steels)
         if (order.Reference is { Length: > 80 } r)
         {
             Say("order.reference", $"The reference has {r.Length} characters; at most 80. Shorten it.");
+        }
+        else if (!NameRules.IsPlain(order.Reference ?? ""))
+        {
+            Say("order.reference", "The reference holds control or invisible characters. Type it again as plain text, at most 80 characters.");
+        }
+
+        if (order.RatedVoltages_kV?.Count > MostVoltages)
+        {
+            Say("order.ratedVoltages_kV", $"{order.RatedVoltages_kV.Count} rated voltages are given; at most {MostVoltages}. Give one for each winding.");
+            return;
         }
 
         for (var i = 0; i < (order.RatedVoltages_kV?.Count ?? 0); i++)

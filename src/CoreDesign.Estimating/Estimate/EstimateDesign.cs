@@ -1,3 +1,4 @@
+using System.Globalization;
 using CoreDesign.Estimating.Contracts;
 using CoreDesign.Estimating.Steels;
 using CoreDesign.Magnetics.Circuits;
@@ -11,6 +12,9 @@ public static class EstimateDesign
     public static Outcome<EstimateResult> Run(DesignInput design, SteelCatalog steels, CancellationToken cancel = default) =>
         Prepare<EstimateResult>(design, steels, core => EstimateShape.Of(core, cancel));
 
+    /// <summary>The highest flux density for which steel data are taken (see the rules of the import); no law here knows anything beyond.</summary>
+    private const double Highest_T = 3;
+
     /// <summary>Checks the design, prepares the core and runs <paramref name="solve"/> on it; every refusal becomes part of the outcome.</summary>
     internal static Outcome<T> Prepare<T>(DesignInput design, SteelCatalog steels, Func<CoreAtWork, T> solve)
         where T : class
@@ -21,6 +25,11 @@ public static class EstimateDesign
         if (resolver.Resolve() is not { } resolved)
         {
             return new() { Errors = resolver.Errors };
+        }
+
+        if (FarAboveSaturation(resolved) is { } reason)
+        {
+            return new() { Unsolvable = new Unsolvable(reason, null) };
         }
 
         try
@@ -43,5 +52,15 @@ public static class EstimateDesign
         {
             return new() { Unsolvable = new Unsolvable(e.Message.Split(" (Parameter", StringSplitOptions.None)[0], null) };
         }
+    }
+
+    /// <summary>What the voltage demands of the limbs, B = U/(sqrt2 pi f N A), where it is beyond any law; else null.</summary>
+    private static string? FarAboveSaturation(ResolvedDesign design)
+    {
+        var phase = design.Supply.Connection is SupplyConnection.StarWithNeutral or SupplyConnection.StarIsolated ? design.Supply.Voltage_V / Math.Sqrt(3) : design.Supply.Voltage_V;
+        var B = phase / (Math.Sqrt(2) * Math.PI * design.Supply.Frequency_Hz * design.Turns * design.Geometry.NetLimbArea_m2);
+        return B <= Highest_T ? null : string.Create(
+            CultureInfo.InvariantCulture,
+            $"The limbs would have to carry {B:0.0#} T; the steel saturates at {design.Steel.SaturationPolarization_T.Value} T, and no figure is given beyond {Highest_T} T. Take more turns, a larger limb or a lower voltage.");
     }
 }

@@ -69,6 +69,16 @@ public static class CircuitSolver
 
         var c = Matrix<double>.Build.DenseOfArray(topology.Loops);
         var l = Matrix<double>.Build.DenseOfArray(topology.Linkages);
+        for (var w = 0; w < k; w++)
+        {
+            // Rounding of the sum counts as nothing.
+            var all = circuit.Windings[w].Coils.Sum(x => Math.Abs(x.Turns));
+            if (Enumerable.Range(0, m).All(j => Math.Abs(topology.Linkages[w, j]) <= 1e-12 * all))
+            {
+                throw new CircuitException($"Winding '{circuit.Windings[w].Name}' links no flux: its coils cancel, or lie on branches outside any loop. Change its coils.");
+            }
+        }
+
         var turns = Math.Max(l.Enumerate().Select(Math.Abs).DefaultIfEmpty(0).Max(), double.Epsilon);
         var a = Matrix<double>.Build.Dense(m + k + star, m + k + star);
         a.SetSubMatrix(0, 0, c.TransposeThisAndMultiply(c));

@@ -6,7 +6,7 @@ namespace CoreDesign.Magnetics.Circuits;
 /// </summary>
 internal sealed class InstantSolver
 {
-    private const int MaxIterations = 80;
+    private const int MaxIterations = 160;
     private const double FluxDensityStep_T = 0.3;
     private readonly MagneticCircuit _circuit;
     private readonly CircuitTopology _topology;
@@ -79,7 +79,8 @@ internal sealed class InstantSolver
                 throw new NotConvergedException("The equations of one instant are singular; two parts of the circuit are linked rigidly.", 1);
             }
 
-            var damping = Damping() * (iteration < 30 ? 1 : 0.5);
+            var limit = Damping();
+            var damping = limit * (iteration < 30 ? 1 : 0.5);
             var relative = 0.0;
             double scale = 0;
             for (var b = 0; b < _states.Length; b++)
@@ -95,7 +96,7 @@ internal sealed class InstantSolver
             }
 
             worst = relative / Math.Max(scale, 1e-3);
-            if (worst < 1e-10 && damping == 1)
+            if (worst < 1e-10 && limit == 1)
             {
                 return;
             }

@@ -71,8 +71,6 @@ internal sealed class PeriodicSolver
         var change = double.PositiveInfinity;
         for (var sweep = 0; sweep < MaxSweeps; sweep++)
         {
-            cancel.ThrowIfCancellationRequested();
-
             // A flux offset that resistance only slowly wears off turns its sign from one half period to the next: the mean of both takes it out at once.
             var mean = hasResistance && sweep % 3 != 2 && sweep > 0;
             for (var j = 0; j < 3; j++)
@@ -88,6 +86,7 @@ internal sealed class PeriodicSolver
             double scale = 0;
             for (var t = 0; t < _half; t++)
             {
+                cancel.ThrowIfCancellationRequested();
                 history[0] = _loopFlux[t + 2];
                 history[1] = _loopFlux[t + 1];
                 history[2] = _loopFlux[t];

@@ -3,6 +3,9 @@ namespace CoreDesign.Magnetics.Geometry;
 /// <summary>Step sets of a limb that fill a circle best. A step of width w reaches a total stack of sqrt(d² − w²), both sides together.</summary>
 public static class StepOptimizer
 {
+    /// <summary>Most widths that a slitting list can have.</summary>
+    public const int MostStockWidths = GeometryChecks.MostStockWidths;
+
     /// <summary>Most steps that <see cref="Best"/> is checked for.</summary>
     public const int MostOptimumSteps = 25;
 

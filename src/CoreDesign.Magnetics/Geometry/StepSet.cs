@@ -6,6 +6,9 @@ public readonly record struct LimbStep(double Width_m, double Stack_m);
 /// <summary>A limb section in a circle. Steps from the widest outward; the fill ratio is gross stack area over the area of the circle.</summary>
 public sealed record StepSet(IReadOnlyList<LimbStep> Steps, double CircleDiameter_m, double GrossArea_m2, double FillRatio)
 {
+    /// <summary>Most steps that a limb can have.</summary>
+    public const int MostSteps = GeometryChecks.MostSteps;
+
     /// <summary>The steps with yoke plates wider than the limb's of the same step by <paramref name="yokeFactor"/> (0.5 to 3).</summary>
     /// <exception cref="GeometryException">Factor out of range.</exception>
     public IReadOnlyList<CoreStep> WithYokes(double yokeFactor)

@@ -13,7 +13,7 @@ public static class Pages
     {
         var services = builder.Services;
         services.AddRazorComponents().AddInteractiveServerComponents();
-        services.AddOpenApi();
+        services.AddApiDescription();
         services.AddHealthChecks();
         services.AddResponseCompression(o => o.MimeTypes = [.. ResponseCompressionDefaults.MimeTypes, "image/svg+xml", "application/problem+json"]);
 

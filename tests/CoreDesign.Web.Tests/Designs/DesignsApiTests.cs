@@ -78,10 +78,12 @@ public sealed class DesignsApiTests : IDisposable
     {
         var id = (await _client.CreateAsync()).GetProperty("id").GetInt64();
 
-        var answers = await Task.WhenAll(Enumerable.Range(0, 6).Select(i => Task.Run(() => _client.SaveAsync(id, "\"1\"", $$"""{"design":{},"title":"Desk {{i}}"}"""), Cancel)));
+        var answers = await Task.WhenAll(Enumerable.Range(0, 20).Select(i => Task.Run(() => _client.SaveAsync(id, "\"1\"", $$"""{"design":{},"title":"Desk {{i}}"}"""), Cancel)));
 
         Assert.Single(answers, a => a.StatusCode == HttpStatusCode.OK);
-        Assert.Equal(5, answers.Count(a => a.StatusCode == HttpStatusCode.PreconditionFailed));
+        Assert.Equal(19, answers.Count(a => a.StatusCode == HttpStatusCode.PreconditionFailed));
+        var whole = await _client.GetAsync($"/api/designs/{id}", HttpStatusCode.OK);
+        Assert.Equal([2, 1], whole.GetProperty("revisions").EnumerateArray().Select(r => r.GetProperty("revision").GetInt32()));
     }
 
     [Theory]

@@ -64,6 +64,15 @@ internal static class Calls
 
     public static StringContent Json(string body) => new(body, Encoding.UTF8, "application/json");
 
+    public static ByteArrayContent Bytes(byte[] body, string? contentType)
+    {
+        var content = new ByteArrayContent(body);
+        if (contentType is not null) content.Headers.TryAddWithoutValidation("Content-Type", contentType);
+        return content;
+    }
+
+    public static Task<HttpResponseMessage> PostJsonAsync(this HttpClient client, string address, string body) => client.PostAsync(new Uri(address, UriKind.Relative), Json(body), Cancel);
+
     public static async Task<JsonElement> CreateAsync(this HttpClient client, string title = "Station", string design = """{"order":{"reference":"HR-1"}}""", string note = "")
     {
         var answer = await client.PostAsync("/api/designs", Json($$"""{"title":{{JsonSerializer.Serialize(title)}},"note":{{JsonSerializer.Serialize(note)}},"design":{{design}}}"""), Cancel);
@@ -86,6 +95,15 @@ internal static class Calls
         Assert.DoesNotContain("   at ", text, StringComparison.Ordinal);
         Assert.DoesNotContain("Exception", text, StringComparison.Ordinal);
         using var document = JsonDocument.Parse(text);
+        if ((int)expected >= 400)
+        {
+            Assert.DoesNotContain("System.", text, StringComparison.Ordinal);
+            Assert.DoesNotContain("CoreDesign.", text, StringComparison.Ordinal);
+            Assert.True(text.Length < 100_000, $"A refusal of {text.Length} characters.");
+            Assert.Equal((int)expected, document.RootElement.GetProperty("status").GetInt32());
+            Assert.NotEqual("", document.RootElement.GetProperty("detail").GetString());
+        }
+
         return document.RootElement.Clone();
     }
 

@@ -19,11 +19,14 @@ internal static class NameRules
         {
             findings.Error(spot, text, $"has {text.Length} characters; shorten it to {longest} at most.");
         }
-        else if (text.EnumerateRunes().Any(Forbidden))
+        else if (!IsPlain(text))
         {
             findings.Error(spot, text, "holds control or invisible characters; type it again as plain text.");
         }
     }
+
+    /// <summary>False where a text holds what can't be seen or printed: control characters, marks of writing direction, halves of pairs.</summary>
+    public static bool IsPlain(string text) => !text.EnumerateRunes().Any(Forbidden);
 
     private static bool Forbidden(Rune rune) => rune == Rune.ReplacementChar || Rune.GetUnicodeCategory(rune) is
         UnicodeCategory.Control or UnicodeCategory.Format or UnicodeCategory.LineSeparator or UnicodeCategory.ParagraphSeparator

@@ -69,6 +69,11 @@ public static class SteelImport
         {
             findings.Error(new Spot(0, "name", ""), draft.Name, "is the name of a built-in grade; add the coil or certificate number.");
         }
+        else if (draft.Name.Length > 0 && (draft.Name.All(c => c == '.') || draft.Name.Equals("import", StringComparison.OrdinalIgnoreCase)))
+        {
+            // Such a name could not be opened: addresses drop points alone, and "import" is where files go.
+            findings.Error(new Spot(0, "name", ""), draft.Name, "can't be the address of a steel; add the coil or certificate number.");
+        }
 
         var file = CleanFileName(fileName);
         draft.Source += file.Length > 0 ? $" (file {file})" : "";

@@ -2,6 +2,7 @@ using CoreDesign.Estimating.Contracts;
 using CoreDesign.Estimating.Estimate;
 using CoreDesign.History.Designs;
 using CoreDesign.Magnetics;
+using CoreDesign.Web.Platform;
 using Microsoft.AspNetCore.Http.HttpResults;
 using Microsoft.AspNetCore.Mvc;
 
@@ -19,24 +20,26 @@ public static class DesignsApi
             .ProducesProblem(400);
         designs.MapPost("/", DesignSaves.CreateAsync).WithName("CreateDesign")
             .WithSummary("Estimate a design and keep it as revision 1 of a new one")
-            .ProducesProblem(400).ProducesProblem(413).ProducesProblem(422);
+            .WithDescription("The design is the body of an estimate. Title and note are optional; the order's reference stands in for a title. A design that can't be estimated is not stored.")
+            .ProducesProblem(400).ProducesProblem(413).ProducesProblem(415).ProducesProblem(422);
         designs.MapGet("/{id}", FindAsync).WithName("GetDesign")
             .WithSummary("A design with its newest input and all its revisions")
             .ProducesProblem(404);
         designs.MapPut("/{id}", DesignSaves.SaveAsync).WithName("SaveDesign")
             .WithSummary("Estimate a changed design and keep it as its next revision")
             .WithDescription("The header If-Match names the revision that the change started from, in quotes. When another was saved since, nothing is stored and the answer (412) shows both.")
-            .ProducesProblem(400).ProducesProblem(404).ProducesProblem(412).ProducesProblem(413).ProducesProblem(422).ProducesProblem(428);
+            .ProducesProblem(400).ProducesProblem(404).ProducesProblem(412).ProducesProblem(413).ProducesProblem(415).ProducesProblem(422).ProducesProblem(428)
+            .WithMetadata(new IfMatchNeeded());
         designs.MapGet("/{id}/revisions/{number}", FindRevisionAsync).WithName("GetRevision")
             .WithSummary("A revision as it was saved: input, study, versions, remarks")
             .WithDescription("With today=true also what today's kernel gives for the same input.")
             .ProducesProblem(400).ProducesProblem(404);
         designs.MapPost("/{id}/copies", DesignSaves.CopyAsync).WithName("CopyDesign")
             .WithSummary("A new design that begins with a revision of this one")
-            .ProducesProblem(400).ProducesProblem(404);
+            .ProducesProblem(400).ProducesProblem(404).ProducesProblem(413).ProducesProblem(415);
         designs.MapPost("/{id}/revisions/{number}/notes", DesignSaves.AddNoteAsync).WithName("AddNote")
             .WithSummary("Add a remark to a revision; the revision itself stays as it is")
-            .ProducesProblem(400).ProducesProblem(404);
+            .ProducesProblem(400).ProducesProblem(404).ProducesProblem(413).ProducesProblem(415);
         routes.MapDraftsApi();
     }
 

@@ -47,7 +47,7 @@ internal static class DraftsApi
         drafts.MapPut("/{key}", PutAsync).WithName("PutDraft")
             .WithSummary("Keep a half-filled design page, in the place of what was there")
             .WithDescription($"The key is a UUID. The payload is any JSON of at most {DraftStore.LargestPayload_bytes / 1024} KiB. A draft that nobody touches for {DraftStore.KeptFor.Days} days is dropped.")
-            .ProducesProblem(400).ProducesProblem(413);
+            .ProducesProblem(400).ProducesProblem(413).ProducesProblem(415);
     }
 
     private static async Task<Results<Ok<DraftAnswer>, ProblemHttpResult>> FindAsync(string key, DraftStore store, CancellationToken cancel)

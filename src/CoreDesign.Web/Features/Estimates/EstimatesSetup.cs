@@ -14,7 +14,7 @@ public static class EstimatesSetup
         builder.Services.AddSingleton<StudyOfDesign>(services =>
         {
             var steels = services.GetRequiredService<SteelShelf>();
-            return (design, cancel) => Task.Run(() => StudyDesign.Run(design, steels.Current, cancel), cancel);
+            return (design, cancel) => Task.Run(() => TimedSolve.Run(TimedSolve.Study, limit => StudyDesign.Run(design, steels.Current, limit), cancel), cancel);
         });
         builder.Services.AddSingleton(services =>
         {

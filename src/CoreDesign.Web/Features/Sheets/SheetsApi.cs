@@ -22,7 +22,7 @@ public static class SheetsApi
             .ProducesProblem(400).ProducesProblem(404);
 
     private static async Task<Results<FileContentHttpResult, ProblemHttpResult>> SheetAsync(
-        string id, string number, string kind, string? paper, string? download, DesignStore store, IConfiguration settings, CancellationToken cancel)
+        string id, string number, string kind, string? paper, string? download, DesignStore store, IConfiguration settings, HttpResponse response, CancellationToken cancel)
     {
         PaperSize? size = paper switch { null or "a4" => PaperSize.A4, "letter" => PaperSize.Letter, _ => null };
         if (size is null)
@@ -41,11 +41,11 @@ public static class SheetsApi
             return Problems.NotFound($"There is no sheet '{DesignAddress.Cut(kind)}'. Sheets: {DesignKind}.");
         }
 
-        // Opened in the browser's own viewer unless a download is asked for.
-        var inline = download is null;
+        // Opened in the browser's own viewer unless a download is asked for; named by number alone, whatever the title holds.
         var request = Request(found, size.Value, settings["CoreDesign:LegalOwner"]);
         var name = string.Create(CultureInfo.InvariantCulture, $"{request.DocumentNumber}-rev{revision}-{(size == PaperSize.A4 ? "a4" : "letter")}.pdf");
-        return TypedResults.Bytes(DesignSheet.Render(request), "application/pdf", inline ? null : name);
+        response.Headers.ContentDisposition = $"{(download is null ? "inline" : "attachment")}; filename=\"{name}\"";
+        return TypedResults.Bytes(DesignSheet.Render(request), "application/pdf");
     }
 
     private static SheetRequest Request(RevisionDetail found, PaperSize paper, string? owner)

@@ -31,13 +31,16 @@ public static class SteelsApi
             .Accepts<string>(Csv)
             .ProducesProblem(400).ProducesProblem(409).ProducesProblem(413).ProducesProblem(415);
         steels.MapGet("/import/template.csv", Template)
-            .WithName("SteelImportTemplate").WithSummary("An example of the import format; decimal=comma gives semicolons and decimal commas");
+            .WithName("SteelImportTemplate").WithSummary("An example of the import format; decimal=comma gives semicolons and decimal commas")
+            .Produces<string>(200, Csv).ProducesProblem(400);
     }
 
     private static Results<Ok<SteelAnswer>, ProblemHttpResult> Find(string grade, SteelShelf shelf)
     {
         var catalog = shelf.Current;
-        return catalog.TryFind(grade, out var found)
+
+        // The server leaves %2F in a route value as it is, since a slash would part it; a steel's name may hold one.
+        return catalog.TryFind(grade, out var found) || catalog.TryFind(grade.Replace("%2F", "/", StringComparison.OrdinalIgnoreCase), out found)
             ? TypedResults.Ok(SteelAnswer.From(found))
             : Problems.NotFound($"There is no steel \"{Cut(grade)}\". Nearest names: {string.Join(", ", catalog.Nearest(Cut(grade), 3))}.");
     }
@@ -66,8 +69,10 @@ public static class SteelsApi
     public static string TakenText(string name) =>
         $"Other data are already kept as \"{name}\"; they stay as they are, because designs may rest on them. Give the new data a name of their own, the coil or certificate number for one.";
 
-    private static FileContentHttpResult Template(string? @decimal = null)
+    private static Results<FileContentHttpResult, ProblemHttpResult> Template(string? @decimal = null)
     {
+        if (@decimal is not (null or "point" or "comma"))
+            return Problems.Refused("decimal", $"'{Cut(@decimal)}' is given; point or comma is needed.");
         var text = @decimal == "comma" ? SteelImport.TemplateWithDecimalComma : SteelImport.Template;
         return TypedResults.File(Encoding.UTF8.GetBytes(text), Csv + "; charset=utf-8", "steel-template.csv");
     }
