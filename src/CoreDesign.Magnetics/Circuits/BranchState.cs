@@ -7,7 +7,9 @@ internal sealed class BranchState
     private readonly double[] _threshold;
     private readonly double[] _weight;
     private readonly double[] _memory;
+    private readonly double[] _memoryAtTurn;
     private double _lastB;
+    private double _lastBAtTurn;
 
     public BranchState(CircuitBranch branch)
     {
@@ -16,6 +18,7 @@ internal sealed class BranchState
         _threshold = [.. stops.Select(s => s.Threshold_T)];
         _weight = [.. stops.Select(s => s.Weight_A_per_m_T)];
         _memory = new double[stops.Length];
+        _memoryAtTurn = new double[stops.Length];
     }
 
     /// <summary>MMF of the memory-free, rate-free part at flux <paramref name="flux"/>, and its slope.</summary>
@@ -94,13 +97,18 @@ internal sealed class BranchState
         _lastB = b;
     }
 
-    /// <summary>Turns the memory over, as half-wave symmetry does from one half period to the next.</summary>
-    public void Reverse()
+    /// <summary>
+    /// Turns the memory over, as half-wave symmetry does from one half period to the next. With <paramref name="mean"/> the next half period starts
+    /// from the mean of what the last one started from and what it left.
+    /// </summary>
+    public void Turn(bool mean)
     {
-        _lastB = -_lastB;
+        _lastB = mean ? 0.5 * (_lastBAtTurn - _lastB) : -_lastB;
+        _lastBAtTurn = _lastB;
         for (var i = 0; i < _memory.Length; i++)
         {
-            _memory[i] = -_memory[i];
+            _memory[i] = mean ? 0.5 * (_memoryAtTurn[i] - _memory[i]) : -_memory[i];
+            _memoryAtTurn[i] = _memory[i];
         }
     }
 }

@@ -56,11 +56,11 @@ internal sealed class InstantSolver
         }
     }
 
-    public void Reverse()
+    public void Turn(bool mean = false)
     {
         foreach (var s in _states)
         {
-            s.Reverse();
+            s.Turn(mean);
         }
     }
 

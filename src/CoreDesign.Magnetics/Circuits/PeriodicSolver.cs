@@ -8,6 +8,7 @@ namespace CoreDesign.Magnetics.Circuits;
 internal sealed class PeriodicSolver
 {
     private const int MaxSweeps = 400;
+    private const double StalledAbove = 0.5;
     private readonly MagneticCircuit _circuit;
     private readonly SolverOptions _options;
     private readonly int _half;
@@ -58,7 +59,7 @@ internal sealed class PeriodicSolver
                 _instant.Accept(_solution[t]);
             }
 
-            _instant.Reverse();
+            _instant.Turn();
         }
     }
 
@@ -68,11 +69,18 @@ internal sealed class PeriodicSolver
         double[] weights = [11.0 / (6 * _step_s), -18.0 / (6 * _step_s), 9.0 / (6 * _step_s), -2.0 / (6 * _step_s)];
         var z = new double[_instant.Size];
         var history = new double[3][];
-        var change = double.PositiveInfinity;
+        double change = double.PositiveInfinity, before = change;
         for (var sweep = 0; sweep < MaxSweeps; sweep++)
         {
-            // A flux offset that resistance only slowly wears off turns its sign from one half period to the next: the mean of both takes it out at once.
-            var mean = hasResistance && sweep % 3 != 2 && sweep > 0;
+            // An offset of flux that resistance only slowly wears off, or that hysteresis holds for ever, turns its sign from one half period to the
+            // next: the mean of both takes it out at once. What then repeats is the state of a core that was demagnetised.
+            var mean = sweep > 0 && sweep % 3 != 2 && (hasResistance || change > StalledAbove * before);
+            before = change;
+            if (sweep > 0)
+            {
+                _instant.Turn(mean);
+            }
+
             for (var j = 0; j < 3; j++)
             {
                 for (var i = 0; i < _m; i++)
@@ -103,7 +111,6 @@ internal sealed class PeriodicSolver
             }
 
             change /= Math.Max(scale, double.Epsilon);
-            _instant.Reverse();
             var offset = 0.0;
             for (var i = 0; i < _m; i++)
             {
