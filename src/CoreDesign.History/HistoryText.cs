@@ -7,6 +7,7 @@ namespace CoreDesign.History;
 public static class HistoryText
 {
     public const int LongestTitle = 200;
+    public const int LongestReference = 100;
     public const int LongestNote = 4000;
     public const int LongestAuthor = 100;
 
@@ -15,6 +16,10 @@ public static class HistoryText
         string.IsNullOrWhiteSpace(title)
             ? new FieldError(path, "The title is empty. Give the design a name, the order's number for instance.")
             : Check(title, path, "title", LongestTitle, severalLines: false);
+
+    /// <summary>The order's reference may be left out.</summary>
+    public static FieldError? CheckReference(string? reference, string path = "order.reference") =>
+        Check(reference ?? "", path, "reference", LongestReference, severalLines: false);
 
     /// <summary>A note may be empty and may have several lines.</summary>
     public static FieldError? CheckNote(string? note, string path = "note") =>

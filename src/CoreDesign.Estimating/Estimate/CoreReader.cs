@@ -175,7 +175,7 @@ internal sealed class CoreReader(DesignResolver resolver)
     {
         if (core.WindowWidth_mm is null && core.LimbPitch_mm is null)
         {
-            resolver.Say("core.windowWidth_mm", FieldCatalog.Find("core.windowWidth_mm").Missing() + " Or give limbPitch_mm.");
+            resolver.Say("core.windowWidth_mm", FieldCatalog.Find("core.windowWidth_mm").Missing() + " Or give the limb pitch, limbPitch_mm.");
             return double.NaN;
         }
 

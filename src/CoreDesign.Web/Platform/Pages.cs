@@ -9,10 +9,13 @@ public static class Pages
     /// <summary>Tag of the health checks that <c>/health/ready</c> asks; <c>/health/live</c> asks none.</summary>
     public const string ReadyTag = "ready";
 
+    /// <summary>Largest message of a page: the longest text a field takes, with room for what encloses it. A longer one would end the page.</summary>
+    private const int LargestMessage_bytes = 1024 * 1024;
+
     public static void AddPages(this WebApplicationBuilder builder)
     {
         var services = builder.Services;
-        services.AddRazorComponents().AddInteractiveServerComponents();
+        services.AddRazorComponents().AddInteractiveServerComponents().AddHubOptions(o => o.MaximumReceiveMessageSize = LargestMessage_bytes);
         services.AddApiDescription();
         services.AddHealthChecks();
         services.AddResponseCompression(o => o.MimeTypes = [.. ResponseCompressionDefaults.MimeTypes, "image/svg+xml", "application/problem+json"]);

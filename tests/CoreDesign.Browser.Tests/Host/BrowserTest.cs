@@ -28,6 +28,7 @@ public abstract class BrowserTest(Site site) : IAsyncLifetime
             await visitor.DisposeAsync();
         }
 
+        if (failed) TestContext.Current.SendDiagnosticMessage(Site.Server.Log);
         GC.SuppressFinalize(this);
         Assert.Empty(faults);
     }

@@ -187,6 +187,68 @@ public sealed class DesignPageStateTests
         Assert.Equal(1, state.Request.Design.Order!.Phases);
     }
 
+    [Theory]
+    [InlineData("core.yoke.stepWidths_mm[0]", "wide")]
+    [InlineData("core.yoke.stepWidths_mm[1]", "2")]
+    [InlineData("core.limbSteps[0].width_mm", "wide")]
+    [InlineData("core.limbSteps[1].stack_mm", "0")]
+    public void First_keystroke_in_a_derived_set_that_is_no_value_leaves_the_set_as_derived(string path, string text)
+    {
+        var state = Solved();
+        state.Type(path, text);
+
+        var core = state.Request.Design.Core!;
+        Assert.True(state.Messages[path] is { Length: > 0 });
+        Assert.Equal(path.StartsWith("core.yoke", StringComparison.Ordinal) ? [210, 190] : null, core.Yoke?.StepWidths_mm);
+        Assert.Equal(path.StartsWith("core.limbSteps", StringComparison.Ordinal) ? [(210, 65.5), (190, 45.5)] : null, core.LimbSteps?.Select(s => (s.Width_mm!.Value, s.Stack_mm!.Value)));
+    }
+
+    [Fact]
+    public void Half_typed_value_displaces_the_other_field_only_once_it_is_a_value()
+    {
+        var state = Solved();
+        state.Type(FormPaths.LimbPitch, "4");
+        Assert.Equal("190", state.Typed[FormPaths.WindowWidth]);
+        Assert.Equal([FormPaths.LimbPitch], state.Messages.Paths);
+
+        state.Type(FormPaths.LimbPitch, "40");
+        Assert.Equal("", state.Typed[FormPaths.WindowWidth]);
+        Assert.Equal(40, state.Request.Design.Core!.LimbPitch_mm);
+    }
+
+    [Fact]
+    public void Emptied_cell_of_a_pinned_yoke_is_missing_and_the_value_before_stands()
+    {
+        var state = Solved();
+        state.Type("core.yoke.stepWidths_mm[0]", "220");
+        state.Type("core.yoke.stepWidths_mm[0]", "");
+
+        Assert.StartsWith("Yoke step width is missing.", state.Messages["core.yoke.stepWidths_mm[0]"], StringComparison.Ordinal);
+        Assert.Equal([220, 190], state.Request.Design.Core!.Yoke!.StepWidths_mm!);
+    }
+
+    [Fact]
+    public void Emptied_row_of_pinned_steps_is_an_empty_row()
+    {
+        var state = Solved();
+        state.PinSteps();
+        state.Type("core.limbSteps[0].width_mm", "");
+        state.Type("core.limbSteps[0].stack_mm", "");
+
+        Assert.Equal(2, state.Request.Design.Core!.LimbSteps!.Count);
+        Assert.Null(state.Request.Design.Core.LimbSteps[0].Width_mm);
+    }
+
+    [Theory]
+    [InlineData(FormPaths.Turns, FormPaths.WantedFluxDensity, "1.6")]
+    [InlineData(FormPaths.WindowWidth, FormPaths.LimbPitch, "400")]
+    public void Needed_value_is_not_offered_for_release_before_another_field_gives_it(string path, string other, string text)
+    {
+        Assert.False(FormRules.CanRelease(DesignText.Empty.With(path, "20"), path));
+        Assert.True(FormRules.CanRelease(DesignText.Empty.With(path, "20").With(other, text), path));
+        Assert.True(FormRules.CanRelease(DesignText.Empty, FormPaths.StackingFactor));
+    }
+
     private static DesignPageState Solved()
     {
         var state = new DesignPageState();

@@ -50,6 +50,16 @@ public sealed class FormReaderTests
         Assert.Equal([20, 0.4], design.Order!.RatedVoltages_kV!);
     }
 
+    [Theory]
+    [InlineData("core.limb.diameter_mm", "wide", "Diameter “wide” is not a number. Write digits with one decimal comma or point, as in 12.5. The range is 30 to 2000 mm.")]
+    [InlineData("order.ratedVoltages_kV", "20 / 1.0.0", "Rated voltage “1.0.0” has 2 commas or points. Write one decimal sign and no thousands separators, as in 1250.5. The range is 0.01 to 1200 kV.")]
+    public void Text_that_is_no_number_is_named_with_its_field_the_mend_and_the_range(string path, string text, string message)
+    {
+        var reading = FormReader.Read(DesignText.Empty.With(path, text), DesignText.Empty);
+
+        Assert.Equal(message, reading.Errors[path]);
+    }
+
     [Fact]
     public void Value_out_of_range_names_value_and_range_and_keeps_what_stood()
     {

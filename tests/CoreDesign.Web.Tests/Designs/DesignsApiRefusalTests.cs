@@ -48,6 +48,7 @@ public sealed class DesignsApiRefusalTests(Service service) : IClassFixture<Serv
     [InlineData("""{"title":"   ","design":{}}""", "title", "empty")]
     [InlineData("""{"title":"two\nlines","design":{}}""", "title", "U+000A")]
     [InlineData("""{"title":"x","note":"\u0000","design":{}}""", "note", "U+0000")]
+    [InlineData("""{"title":"x","design":{"order":{"reference":"a\u0000b"}}}""", "design.order.reference", "U+0000")]
     [InlineData("""{"title":"x","state":"checked","design":{}}""", "state", "'state' is not a member here")]
     [InlineData("""{"title":"x","author":"someone","design":{}}""", "author", "'author' is not a member here")]
     [InlineData("""{"title":"x","design":{"core":{"windowHeight_mm":"520"}}}""", "design.core.windowHeight_mm", "JSON number")]

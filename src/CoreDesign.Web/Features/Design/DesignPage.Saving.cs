@@ -34,6 +34,7 @@ public sealed partial class DesignPage
         switch (await session!.SaveAsync(words!.Title, words.Note, words.Author, onTop))
         {
             case SaveResult.Saved saved:
+                saveDialog!.Forget();
                 Navigation.NavigateTo($"design/{saved.Revision.Id}", replace: session.Base is null);
                 return null;
             case SaveResult.Conflict conflict:

@@ -10,6 +10,8 @@ namespace CoreDesign.Web.Features.Design;
 /// <summary>Wiring of the design page: addresses and events to the session, the session to what is shown.</summary>
 public sealed partial class DesignPage
 {
+    private const string Unnamed = "New design";
+
     private readonly DrawingScenes drawing = new();
     private readonly EvidenceView evidence = new();
     private DesignSession? session;
@@ -36,9 +38,9 @@ public sealed partial class DesignPage
 
     private DesignPageState State => session!.State;
 
-    private string Name => session is null ? "" : State.Typed[FormPaths.Reference] is { Length: > 0 } reference ? reference : session.Base?.Info.Title ?? "New design";
+    private string Name => session is null ? "" : State.Typed[FormPaths.Reference] is { Length: > 0 } reference ? reference : session.Base?.Info.Title ?? Unnamed;
 
-    private string Title => Name.Length > 0 ? $"{Name} design" : "Design";
+    private string Title => Name is "" or Unnamed ? Unnamed : $"{Name} design";
 
     private string Rating => session is null ? "" : RatingText.Of(State.Request.Design);
 

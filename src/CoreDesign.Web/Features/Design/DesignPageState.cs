@@ -74,6 +74,9 @@ public sealed class DesignPageState
 
         touched.Add(path);
         undo.Keep(Typed, path);
+
+        // A set that this keystroke pins stands as it was derived, until what is typed is a value.
+        reading = FormReader.Read(FormRules.Pin(Typed, path, Estimate?.Geometry), reading.Standing);
         Set(FormRules.Type(Typed, path, text, Estimate?.Geometry));
     }
 

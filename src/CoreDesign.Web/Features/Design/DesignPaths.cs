@@ -79,9 +79,11 @@ public static partial class DesignPaths
                     throw new FormatException($"A list of the form has at most {LongestList} items.");
                 }
 
+                // A row that is left out is an empty row, so that its fields are the ones that are missing.
+                var rows = i < steps.Count - 1 && steps[i + 1][0] != '[';
                 while (list.Count <= index)
                 {
-                    list.Add(null);
+                    list.Add(rows ? new JsonObject() : null);
                 }
 
                 at = list[index] ??= Make();

@@ -25,6 +25,14 @@ public static partial class FormReader
             }
         }
 
+        foreach (var path in FormRules.OpenYokeWidths(typed))
+        {
+            errors[path] = FormLayout.Find(path).Descriptor!.Missing();
+            standing = standing.With(path, before[path]);
+        }
+
+        // A list can't have a hole; where nothing stood in it before, the yoke is the default one until the row is filled in.
+        standing = FormRules.OpenYokeWidths(standing).Any() ? standing.Without(FormPaths.YokeWidths) : standing;
         return new(Design(standing), standing, errors);
     }
 
@@ -77,6 +85,9 @@ public static partial class FormReader
         return texts;
     }
 
+    /// <summary>True for a text that can be taken for its field.</summary>
+    public static bool IsValue(string path, string text) => !string.IsNullOrWhiteSpace(text) && Check(path, text) is null;
+
     private static string? Check(string path, string text)
     {
         var field = FormLayout.Find(path);
@@ -98,7 +109,12 @@ public static partial class FormReader
             return null;
         }
 
-        return NumberText.TryRead(text, out var value, out var mend) ? field.Descriptor?.Check(value) : mend;
+        if (NumberText.TryRead(text, out var value, out var mend))
+        {
+            return field.Descriptor?.Check(value);
+        }
+
+        return field.Descriptor is { } known ? $"{known.Label} {mend} The range is {known.Range}." : mend;
     }
 
     private static string[] Split(string text) => ListSign().Split(text.Trim()).Where(t => t.Length > 0).ToArray();

@@ -8,20 +8,9 @@ public static partial class FormRules
 {
     public static DesignText Type(DesignText texts, string path, string text, GeometryResult? geometry)
     {
-        if (path.StartsWith(FormPaths.LimbSteps + "[", StringComparison.Ordinal))
-        {
-            texts = PinSteps(texts, geometry);
-        }
-        else if (path.StartsWith(FormPaths.YokeWidths + "[", StringComparison.Ordinal))
-        {
-            texts = PinYoke(texts, geometry);
-        }
-        else if (text.Trim().Length > 0)
-        {
-            texts = Displace(texts, path, text);
-        }
-
-        return texts.With(path, text);
+        // What is half typed displaces nothing: the other field answers until this one can.
+        texts = Pin(texts, path, geometry);
+        return (FormReader.IsValue(path, text) ? Displace(texts, path, text) : texts).With(path, text);
     }
 
     /// <summary>Takes the derived step set as the start of one's own; the circle waits until the steps are released.</summary>
@@ -57,6 +46,16 @@ public static partial class FormRules
         return texts.Without(FormPaths.LimbSteps).Without("form.kept").With(FormPaths.Diameter, diameter).With(FormPaths.StepCount, count);
     }
 
+    /// <summary>True where the design goes on without the typed value, because a default or another field stands in for it.</summary>
+    public static bool CanRelease(DesignText texts, string path) => path switch
+    {
+        FormPaths.Diameter => texts.HasItems(FormPaths.LimbSteps),
+        FormPaths.WindowWidth => texts.Has(FormPaths.LimbPitch),
+        FormPaths.LimbPitch => texts.Has(FormPaths.WindowWidth),
+        FormPaths.Turns => texts.Has(FormPaths.WantedFluxDensity),
+        _ => true,
+    };
+
     /// <summary>Takes away one row of the hand-typed steps.</summary>
     public static DesignText RemoveStep(DesignText texts, int row)
     {
@@ -73,6 +72,19 @@ public static partial class FormRules
     /// <summary>Rows of the hand-typed step table; 0 where the steps are derived.</summary>
     public static int StepRows(DesignText texts) =>
         texts.All.Select(p => StepCell().Match(p.Key)).Where(m => m.Success).Select(m => int.Parse(m.Groups["row"].Value, System.Globalization.CultureInfo.InvariantCulture) + 1).DefaultIfEmpty(0).Max();
+
+    /// <summary>Cells without text among the hand-typed yoke widths.</summary>
+    public static IEnumerable<string> OpenYokeWidths(DesignText texts)
+    {
+        var rows = texts.All.Select(p => YokeCell().Match(p.Key)).Where(m => m.Success).Select(m => int.Parse(m.Groups["row"].Value, System.Globalization.CultureInfo.InvariantCulture) + 1).DefaultIfEmpty(0).Max();
+        return Enumerable.Range(0, rows).Select(FormPaths.YokeWidth).Where(path => !texts.Has(path));
+    }
+
+    /// <summary>The texts with the set pinned to which a path belongs, before anything is typed into it.</summary>
+    public static DesignText Pin(DesignText texts, string path, GeometryResult? geometry) =>
+        path.StartsWith(FormPaths.LimbSteps + "[", StringComparison.Ordinal) ? PinSteps(texts, geometry)
+        : path.StartsWith(FormPaths.YokeWidths + "[", StringComparison.Ordinal) ? PinYoke(texts, geometry)
+        : texts;
 
     private static DesignText PinYoke(DesignText texts, GeometryResult? geometry)
     {
@@ -112,6 +124,9 @@ public static partial class FormRules
 
     // A set that is typed is cut: tenths of a millimetre are what a works shears and stacks to (common practice, no source).
     private static string Tenth(double length_mm) => NumberText.Exact(Math.Max(0.2, Math.Round(length_mm, 1)));
+
+    [GeneratedRegex(@"^core\.yoke\.stepWidths_mm\[(?<row>\d{1,3})\]$", RegexOptions.ExplicitCapture, 1000)]
+    private static partial Regex YokeCell();
 
     [GeneratedRegex(@"^core\.limbSteps\[(?<row>\d{1,3})\]", RegexOptions.ExplicitCapture, 1000)]
     private static partial Regex StepCell();
