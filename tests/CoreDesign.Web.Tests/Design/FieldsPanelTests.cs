@@ -53,8 +53,12 @@ public sealed class FieldsPanelTests : BunitContext
         var pitch = panel.FindAll("input").Single(i => i.Id == FormPaths.LimbPitch);
         Assert.Equal(("400", ""), (pitch.GetAttribute("placeholder"), pitch.GetAttribute("value") ?? ""));
 
-        panel.FindAll("button.st").First(b => b.GetAttribute("aria-label")!.StartsWith("Window width", StringComparison.Ordinal)).Click();
-        Assert.Equal((FormPaths.WindowWidth, ""), typed);
+        var releases = panel.FindAll("button.st").ToDictionary(b => b.GetAttribute("aria-label")!.Split(':')[0], StringComparer.Ordinal);
+        releases["Highest voltage"].Click();
+        Assert.Equal(("order.highestVoltage_percent", ""), typed);
+
+        // Nothing would stand in for the only width of the window.
+        Assert.DoesNotContain("Window width", releases.Keys);
     }
 
     private IRenderedComponent<FieldsPanel> Show(DesignPageState state, Action<(string Path, string Text)>? type = null) =>
