@@ -9,7 +9,7 @@ namespace CoreDesign.Browser.Tests.Walks;
 public sealed class HostileTextTests(Site site) : BrowserTest(site)
 {
     private const string Script = "<img src=x onerror=\"window.ran=1\"><script>window.ran=1</script>";
-    private const string RightToLeft = "\u202Eנגד abc 123";
+    private const string RightToLeft = "נגד abc 123";
 
     [Theory]
     [InlineData("h1 " + Script)]
@@ -30,6 +30,16 @@ public sealed class HostileTextTests(Site site) : BrowserTest(site)
         await Assertions.Expect(page.GetByRole(AriaRole.Link, new() { Name = name, Exact = true })).ToBeVisibleAsync();
         Assert.False(await page.EvaluateAsync<bool>("() => 'ran' in window"), "A script in a name ran.");
         Assert.Equal(0, await page.Locator("main img, main script").CountAsync());
+    }
+
+    [Fact]
+    public async Task A_reference_with_invisible_characters_is_refused_at_its_field()
+    {
+        var visitor = await ComeAsync();
+        await visitor.OpenDemoAsync();
+        await visitor.Page.EnterAsync("order.reference", "a\u202Eb");
+        await Assertions.Expect(visitor.Page.Locator(".fields .msg")).ToContainTextAsync("control or invisible characters");
+        await Assertions.Expect(visitor.Page.OldFigures()).ToHaveCountAsync(1);
     }
 
     [Fact]

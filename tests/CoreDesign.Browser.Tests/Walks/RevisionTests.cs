@@ -33,7 +33,7 @@ public sealed partial class RevisionTests(Site site) : BrowserTest(site)
 
         await visitor.GoAsync($"/designs/{id}?revision=1");
         await page.GetByRole(AriaRole.Button, new() { Name = "Copy to a new design" }).ClickAsync();
-        await page.WaitForURLAsync(FirstRevision());
+        await Assertions.Expect(page).ToHaveURLAsync(new Regex("/design/[0-9]+/1$", RegexOptions.None, TimeSpan.FromSeconds(1)));
         Assert.NotEqual(id.ToString(System.Globalization.CultureInfo.InvariantCulture), FirstRevision().Match(page.Url).Groups["id"].Value);
         await Assertions.Expect(page.Field(Diameter)).ToHaveValueAsync("96");
         await Assertions.Expect(page.Figure("No-load loss")).ToHaveTextAsync(loss);

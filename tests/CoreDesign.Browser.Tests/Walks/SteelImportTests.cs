@@ -28,7 +28,7 @@ public sealed class SteelImportTests(Site site) : BrowserTest(site)
         await AssertNotStoredAsync(page, Name);
 
         await page.GetByRole(AriaRole.Button, new() { Name = "Keep this steel" }).ClickAsync();
-                await Assertions.Expect(page.GetByRole(AriaRole.Heading, new() { Name = Name, Exact = true })).ToBeVisibleAsync();
+        await Assertions.Expect(page.GetByRole(AriaRole.Heading, new() { Name = Name, Exact = true })).ToBeVisibleAsync();
         await page.GetByRole(AriaRole.Link, new() { Name = "All steels" }).ClickAsync();
         await page.GetByRole(AriaRole.Searchbox).FillAsync("4711");
         await Assertions.Expect(page.Locator(".ht tbody tr")).ToHaveCountAsync(1);
@@ -50,7 +50,7 @@ public sealed class SteelImportTests(Site site) : BrowserTest(site)
         var good = SteelImport.Template.Replace(TemplateName, Name, StringComparison.Ordinal);
         (string Text, string Old, string New, string Line, string[] Says)[] cases =
         [
-            (good, "loss,50,1.5,0.756", "loss,50,1,5,0,756", "The row", ["cells where the header has 4", "decimal commas need semicolons"]),
+            (good, "loss,50,1.5,0.756", "loss,50,1,5,0,756", "the row", ["cells where the header has 4", "decimal commas need semicolons"]),
             (good, "magnetization,50,1.3,22", "magnetization,50,1.3,12", "value", ["12", "must rise with flux density", "Correct or leave out one of the two"]),
             (good, "thickness_mm,0.3", "thickness_mm,300", "thickness_mm", ["300", "must lie between 0.1 and 0.65 mm", "looks like micrometres: write 0.3"]),
             (good, "loss,50,1.5,0.756", "loss,50,1.5,0.756 W/kg", "value", ["0.756 W/kg", "is not a number", "no unit"]),
