@@ -75,7 +75,13 @@ internal sealed record RandomCircuit(CircuitCase Case, double A, double B, int E
         {
             branches.AddRange(new[] { 0, 2 }.Select(i => new CaseBranch
             {
-                Name = $"return{i}", From = $"t{i}", To = $"b{i}", Area = area * within(0.45, 0.6), Length = within(1.5, 2.5), Material = "steel", Gap = within(1e-5, 1e-4),
+                Name = $"return{i}",
+                From = $"t{i}",
+                To = $"b{i}",
+                Area = area * within(0.45, 0.6),
+                Length = within(1.5, 2.5),
+                Material = "steel",
+                Gap = within(1e-5, 1e-4),
             }));
         }
         else
