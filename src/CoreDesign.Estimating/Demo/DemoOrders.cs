@@ -10,6 +10,9 @@ public sealed record DemoOrder
 
     /// <summary>Says that it is invented, and what it shows.</summary>
     public required string Note { get; init; }
+
+    /// <summary>What it shows: the note without its first sentence, for a list whose heading says that the orders are invented.</summary>
+    public string Shows => Note[(Note.IndexOf(". ", StringComparison.Ordinal) + 2)..];
     public required DesignInput Design { get; init; }
 }
 

@@ -39,7 +39,7 @@ internal sealed class ChartBuilder
     public ChartBuilder(ChartOptions o, Axis x, Axis y, Axis? right, string caption, string xCaption)
     {
         (_o, _x, _y, _right) = (o.Checked(), x, y, right);
-        double left = Widest(y) + 8, end = right is null ? Math.Max(8, (Widest(x) / 2) + 1) : Widest(right) + 9;
+        double left = Math.Max(Widest(y) + 8, (Widest(x) / 2) + 1), end = right is null ? Math.Max(8, (Widest(x) / 2) + 1) : Widest(right) + 9;
         Plot = new Box(left, o.TextSize + 9, o.Width - left - end, o.Height - (3 * o.TextSize) - 19);
         Frame(caption, xCaption);
     }

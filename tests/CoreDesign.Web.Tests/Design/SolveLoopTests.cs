@@ -70,6 +70,23 @@ public sealed class SolveLoopTests
     }
 
     [Fact]
+    public async Task Who_waits_for_the_answer_gets_that_of_the_newest_edit()
+    {
+        var state = new DesignPageState();
+        state.Load(FormReader.Texts(Samples.Input));
+        using var loop = new SolveLoop(Engine() with { Estimate = (design, _) => Samples.Ok(Samples.Estimate with { NoLoadLoss_W = design.Core!.WindowHeight_mm!.Value }) }, state, () => { }) { Rest = TimeSpan.FromHours(1) };
+        Assert.True(loop.Answered.IsCompleted);
+
+        var first = loop.RunAsync();
+        state.Type(FormPaths.WindowHeight, "600");
+        _ = loop.RunAsync();
+        await loop.Answered.WaitAsync(TimeSpan.FromMinutes(1), TestContext.Current.CancellationToken);
+
+        Assert.Equal(600, state.Estimate!.NoLoadLoss_W);
+        await first;
+    }
+
+    [Fact]
     public async Task Refused_design_solves_no_levers()
     {
         var state = new DesignPageState();

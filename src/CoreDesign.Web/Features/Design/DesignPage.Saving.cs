@@ -12,13 +12,14 @@ public sealed partial class DesignPage
 
     private async Task AskSave()
     {
+        await session!.Loop.Answered;
         if (!State.IsComplete)
         {
             await script!.InvokeVoidAsync("focusFirstError");
             return;
         }
 
-        await saveDialog!.ShowAsync(session!.Base?.Info.Title ?? string.Join(", ", new[] { State.Typed[FormPaths.Reference], Rating }.Where(t => t.Length > 0)));
+        await saveDialog!.ShowAsync(session.Base?.Info.Title ?? string.Join(", ", new[] { State.Typed[FormPaths.Reference], Rating }.Where(t => t.Length > 0)));
     }
 
     private async Task<string?> Save(SaveWords given)

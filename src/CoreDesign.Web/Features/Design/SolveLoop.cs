@@ -9,6 +9,7 @@ namespace CoreDesign.Web.Features.Design;
 public sealed class SolveLoop(DesignEngine engine, DesignPageState state, Action changed) : IDisposable
 {
     private CancellationTokenSource? running;
+    private TaskCompletionSource answered = Answering();
 
     /// <summary>Keystrokes that come while an edit is being answered and closer than this are one edit; the first of them is answered at once.</summary>
     public TimeSpan Pause { get; init; } = TimeSpan.FromMilliseconds(40);
@@ -19,6 +20,9 @@ public sealed class SolveLoop(DesignEngine engine, DesignPageState state, Action
     public bool IsEstimating { get; private set; }
 
     public bool IsStudying { get; private set; }
+
+    /// <summary>Ends when the newest edit is answered or refused; at once where nothing is being answered.</summary>
+    public Task Answered => IsEstimating ? answered.Task : Task.CompletedTask;
 
     /// <summary>Solves for the texts as they are now; returns when everything is in, or when a newer edit took over.</summary>
     public async Task RunAsync()
@@ -32,6 +36,7 @@ public sealed class SolveLoop(DesignEngine engine, DesignPageState state, Action
 
         var cancel = own.Token;
         var answering = IsEstimating;
+        answered = answering ? answered : Answering();
         var solving = state.Begin();
         try
         {
@@ -51,6 +56,7 @@ public sealed class SolveLoop(DesignEngine engine, DesignPageState state, Action
 
             IsEstimating = false;
             IsStudying = outcome.Ok;
+            answered.TrySetResult();
             changed();
             await StudyAsync(solving, cancel);
         }
@@ -63,6 +69,7 @@ public sealed class SolveLoop(DesignEngine engine, DesignPageState state, Action
             if (ReferenceEquals(running, own))
             {
                 IsEstimating = IsStudying = false;
+                answered.TrySetResult();
             }
         }
     }
@@ -86,6 +93,8 @@ public sealed class SolveLoop(DesignEngine engine, DesignPageState state, Action
         last?.Cancel();
         last?.Dispose();
     }
+
+    private static TaskCompletionSource Answering() => new(TaskCreationOptions.RunContinuationsAsynchronously);
 
     private async Task StudyAsync(Solving solving, CancellationToken cancel)
     {
