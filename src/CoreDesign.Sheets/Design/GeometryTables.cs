@@ -18,9 +18,9 @@ internal static class GeometryTables
             ("Fill ratio, gross area to circle", Fixed(g.FillRatio, 4), false, false),
             ("Stack height", Mm(g.StackHeight_mm), false, false),
             ("Limb width; yoke height", $"{Mm(g.LimbWidth_mm)}; {Mm(g.YokeHeight_mm)}", false, false),
-            ("Window, height by width", $"{Plain(g.WindowHeight_mm)} × {Mm(g.WindowWidth_mm)}", false, false),
+            ("Window, height by width", $"{Plain(g.WindowHeight_mm, 1)} × {Mm(g.WindowWidth_mm)}", false, false),
             ("Limb pitch", Mm(g.LimbPitch_mm), false, false),
-            ("Overall, width by height", $"{Plain(g.OverallWidth_mm)} × {Mm(g.OverallHeight_mm)}", false, false));
+            ("Overall, width by height", $"{Plain(g.OverallWidth_mm, 1)} × {Mm(g.OverallHeight_mm)}", false, false));
     }
 
     public static Table Excitation(EstimateResult e)

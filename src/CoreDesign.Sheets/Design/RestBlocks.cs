@@ -59,7 +59,7 @@ internal static class RestBlocks
         yield return e.Joint.EffectiveGapUsed
             ? $"Joint: an effective gap of {SummaryTables.Value(e.Inputs.Joint?.EffectiveGap_mm, "mm")} at each joint, given by the works, in place of the joint model."
             : $"Joint: {Words.Joint(e.Inputs.Joint)}, {Plain(e.Joint.SheetsPerPosition)} to a position, gap {SummaryTables.Value(e.Inputs.Joint?.Gap_mm, "mm")}, interface {SummaryTables.Value(e.Inputs.Joint?.Interface_um, "µm")}; solved sheet by sheet.";
-        yield return $"Building factor {Plain(e.Model.BuildingFactor)}: {e.Model.BuildingFactorSource}.";
+        yield return e.Model.BuildingFactorSource;
         yield return $"Energy balance of the solution: {With(Significant(100 * e.EnergyBalance.RelativeError, 2), "%")} between terminals and material. Steel at {With(Plain(e.Model.Temperature_C, 1), "°C")}.";
         yield return $"Kernel {e.KernelVersion}, steel data {e.SteelDataRevision}.";
         yield return "Values in italics were left open and derived or taken by default; dimensions in brackets follow from the others and are not to be gauged.";
