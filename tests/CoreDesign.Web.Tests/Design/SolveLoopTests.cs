@@ -74,16 +74,36 @@ public sealed class SolveLoopTests
     {
         var state = new DesignPageState();
         state.Load(FormReader.Texts(Samples.Input));
-        using var loop = new SolveLoop(Engine() with { Estimate = (design, _) => Samples.Ok(Samples.Estimate with { NoLoadLoss_W = design.Core!.WindowHeight_mm!.Value }) }, state, () => { }) { Rest = TimeSpan.FromHours(1) };
+        var first = true;
+        using var started = new ManualResetEventSlim();
+        using var loop = new SolveLoop(
+            Engine() with
+            {
+                Estimate = (design, cancel) =>
+                {
+                    if (first)
+                    {
+                        first = false;
+                        started.Set();
+                        cancel.WaitHandle.WaitOne(TimeSpan.FromSeconds(10));
+                        cancel.ThrowIfCancellationRequested();
+                    }
+
+                    return Samples.Ok(Samples.Estimate with { NoLoadLoss_W = design.Core!.WindowHeight_mm!.Value });
+                },
+            },
+            state,
+            () => { }) { Rest = TimeSpan.FromHours(1) };
         Assert.True(loop.Answered.IsCompleted);
 
-        var first = loop.RunAsync();
+        var older = loop.RunAsync();
+        started.Wait(TimeSpan.FromSeconds(10), TestContext.Current.CancellationToken);
         state.Type(FormPaths.WindowHeight, "600");
         _ = loop.RunAsync();
         await loop.Answered.WaitAsync(TimeSpan.FromMinutes(1), TestContext.Current.CancellationToken);
 
         Assert.Equal(600, state.Estimate!.NoLoadLoss_W);
-        await first;
+        await older;
     }
 
     [Fact]
