@@ -93,7 +93,8 @@ public sealed class SolveLoopTests
                 },
             },
             state,
-            () => { }) { Rest = TimeSpan.FromHours(1) };
+            () => { })
+        { Rest = TimeSpan.FromHours(1) };
         Assert.True(loop.Answered.IsCompleted);
 
         var older = loop.RunAsync();
