@@ -20,8 +20,8 @@ internal static class ButtPlates
             var whole = frame.Axes[last] + ((frame.LimbWidth(0, step) + frame.LimbWidth(last, step)) / 2);
             plates.Add(Plate(frame, k, PlateShape.Yoke, 2, step.YokeWidth_m, whole));
 
-            // Spans between limbs of the same two widths are one kind of plate.
-            foreach (var kind in Enumerable.Range(0, last).GroupBy(i => frame.Layout.Limbs[i].WidthShare + frame.Layout.Limbs[i + 1].WidthShare))
+            // Spans over windows of one width between limbs of the same two widths are one kind of plate.
+            foreach (var kind in Enumerable.Range(0, last).GroupBy(i => (frame.Layout.IsReturnWindow(i), frame.Layout.Limbs[i].WidthShare + frame.Layout.Limbs[i + 1].WidthShare)))
             {
                 plates.Add(Plate(frame, k, PlateShape.Yoke, 2 * kind.Count(), step.YokeWidth_m, frame.ClearWidth(kind.First(), step)));
             }

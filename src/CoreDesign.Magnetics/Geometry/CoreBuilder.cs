@@ -14,12 +14,15 @@ public static class CoreBuilder
     /// <param name="windowHeight_m">Clear, at the widest step.</param>
     /// <param name="windowWidth_m">Clear, at the widest step; see <see cref="WindowWidth"/> for a given limb pitch.</param>
     /// <param name="joint">Only the cut of the plates follows from it; the parts are the same.</param>
-    /// <exception cref="GeometryException">A value out of range, steps out of order, or a yoke too low for the points of a mitred T joint.</exception>
+    /// <exception cref="GeometryException">A value out of range, steps out of order, or a yoke of a three-limb core too low for the points of a mitred T joint.</exception>
     public static CoreGeometry Build(CoreForm form, IReadOnlyList<CoreStep> steps, double stackingFactor, double windowHeight_m, double windowWidth_m, JointKind joint) =>
         Build(CoreLayout.Of(form), steps, stackingFactor, windowHeight_m, windowWidth_m, joint);
 
     /// <inheritdoc cref="Build(CoreForm, IReadOnlyList{CoreStep}, double, double, double, JointKind)"/>
-    public static CoreGeometry Build(CoreLayout layout, IReadOnlyList<CoreStep> steps, double stackingFactor, double windowHeight_m, double windowWidth_m, JointKind joint)
+    /// <param name="layout">Arrangement of limbs with the width of the return limbs.</param>
+    /// <param name="returnWindowWidth_m">Clear, at the widest step, between a wound and a return limb where wound limbs also stand side by side;
+    /// null for half the window width: such a window holds one winding, that between wound limbs two.</param>
+    public static CoreGeometry Build(CoreLayout layout, IReadOnlyList<CoreStep> steps, double stackingFactor, double windowHeight_m, double windowWidth_m, JointKind joint, double? returnWindowWidth_m = null)
     {
         ArgumentNullException.ThrowIfNull(layout);
         ArgumentNullException.ThrowIfNull(steps);
@@ -28,7 +31,9 @@ public static class CoreBuilder
         GeometryChecks.Length("windowHeight_m", windowHeight_m, "Give the clear height between the yokes at the widest step.");
         GeometryChecks.Length("windowWidth_m", windowWidth_m, "Give the clear width between the limbs at the widest step.");
 
-        var frame = new CoreFrame(layout, [.. steps], stackingFactor, windowHeight_m, windowWidth_m);
+        var returnWindow = layout.HasReturnWindows ? returnWindowWidth_m ?? (windowWidth_m / 2) : windowWidth_m;
+        GeometryChecks.Length("returnWindowWidth_m", returnWindow, "Give the clear width between a wound and a return limb at the widest step.");
+        var frame = new CoreFrame(layout, [.. steps], stackingFactor, windowHeight_m, windowWidth_m, returnWindow);
         var gross = steps.Sum(s => s.Stack_m * s.LimbWidth_m);
         return new CoreGeometry
         {
@@ -37,7 +42,8 @@ public static class CoreBuilder
             StackingFactor = stackingFactor,
             WindowHeight_m = windowHeight_m,
             WindowWidth_m = windowWidth_m,
-            LimbPitch_m = LimbPitch(windowWidth_m, steps[0].LimbWidth_m),
+            ReturnWindowWidth_m = returnWindow,
+            LimbPitch_m = LimbPitch(windowWidth_m, steps[0].LimbWidth_m * layout.PitchShare),
             CircleDiameter_m = StepOptimizer.CircleAround(LimbSteps(steps)),
             GrossLimbArea_m2 = gross,
             NetLimbArea_m2 = stackingFactor * gross,
@@ -45,6 +51,7 @@ public static class CoreBuilder
             StackHeight_m = steps.Sum(s => s.Stack_m),
             OverallWidth_m = frame.OverallWidth,
             OverallHeight_m = windowHeight_m + (2 * steps[0].YokeWidth_m),
+            Limbs = [.. layout.Limbs.Select((l, i) => new CoreLimb(l.Letter, frame.Axes[i], l.WidthShare, frame.NetLimbArea(i), l.IsReturn))],
             Parts = CoreParts.Of(frame),
             Plates = joint switch
             {
@@ -55,7 +62,7 @@ public static class CoreBuilder
         };
     }
 
-    /// <summary>Distance of neighbouring limb axes: clear window width plus the widest limb plate.</summary>
+    /// <summary>Distance of neighbouring limb axes: clear window width plus the widest limb plate (the mean of both limbs' where they differ).</summary>
     /// <exception cref="GeometryException">A length out of range.</exception>
     public static double LimbPitch(double windowWidth_m, double widestLimbWidth_m)
     {

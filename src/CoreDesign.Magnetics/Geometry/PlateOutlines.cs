@@ -9,42 +9,43 @@ internal static class PlateOutlines
     public static (double X_m, double Y_m)[] Rectangle(double length, double width) => [(0, 0), (length, 0), (length, width), (0, width)];
 
     /// <summary>
-    /// A plate with 45° cuts from both ends of its short side, <paramref name="cut"/> deep; where the cut is not as deep as the plate is
-    /// wide, straight ends remain below it. <paramref name="notches"/>: 90° notches in the short side, (middle, mouth) with
+    /// A plate with 45° cuts from both ends of its short side, <paramref name="left"/> and <paramref name="right"/> deep; where a cut is not as
+    /// deep as the plate is wide, a straight end remains below it. <paramref name="notches"/>: 90° notches in the short side, (middle, mouth) with
     /// the middle measured from the left end of the short side.
     /// </summary>
-    public static (double X_m, double Y_m)[] Mitred(double shortSide, double width, double cut, params IReadOnlyList<(double Middle, double Mouth)> notches)
+    public static (double X_m, double Y_m)[] Mitred(double shortSide, double width, double left, double right, params IReadOnlyList<(double Middle, double Mouth)> notches)
     {
-        var longSide = shortSide + (2 * cut);
-        var straight = width - cut;
+        var longSide = shortSide + left + right;
         var p = new List<(double, double)> { (0, 0), (longSide, 0) };
-        if (straight > 0)
+        if (right < width)
         {
-            p.Add((longSide, straight));
+            p.Add((longSide, width - right));
         }
 
-        p.Add((longSide - cut, width));
+        p.Add((longSide - right, width));
         foreach (var (middle, mouth) in notches.Reverse())
         {
-            p.Add((cut + middle + (mouth / 2), width));
-            p.Add((cut + middle, width - (mouth / 2)));
-            p.Add((cut + middle - (mouth / 2), width));
+            p.Add((left + middle + (mouth / 2), width));
+            p.Add((left + middle, width - (mouth / 2)));
+            p.Add((left + middle - (mouth / 2), width));
         }
 
-        p.Add((cut, width));
-        if (straight > 0)
+        p.Add((left, width));
+        if (left < width)
         {
-            p.Add((0, straight));
+            p.Add((0, width - left));
         }
 
         return [.. p];
     }
 
-    /// <summary>A plate with a 90° point at each end; the shoulders are its short side.</summary>
-    public static (double X_m, double Y_m)[] Pointed(double shortSide, double width)
+    /// <summary>A plate with a 90° point at each end, <paramref name="tip"/> deep; below half the width the point is cut flat. The shoulders are its short side.</summary>
+    public static (double X_m, double Y_m)[] Pointed(double shortSide, double width, double tip)
     {
-        var tip = width / 2;
-        return [(tip, 0), (tip + shortSide, 0), ((2 * tip) + shortSide, tip), (tip + shortSide, width), (tip, width), (0, tip)];
+        var longSide = shortSide + (2 * tip);
+        return tip < width / 2
+            ? [(tip, 0), (tip + shortSide, 0), (longSide, tip), (longSide, width - tip), (tip + shortSide, width), (tip, width), (0, width - tip), (0, tip)]
+            : [(tip, 0), (tip + shortSide, 0), (longSide, tip), (tip + shortSide, width), (tip, width), (0, tip)];
     }
 
     /// <summary>Enclosed area by the shoelace rule, positive for a counter-clockwise outline.</summary>

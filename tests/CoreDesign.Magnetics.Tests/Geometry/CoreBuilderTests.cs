@@ -66,14 +66,15 @@ public sealed class CoreBuilderTests
     }
 
     [Fact]
-    public void Layout_with_half_wide_end_limbs_is_built_by_description_alone()
+    public void Five_limb_core_has_return_windows_of_half_width_unless_told()
     {
-        // A row of five with end limbs of half width and a yoke of 0.55: what a further form needs is only its entry.
-        var layout = new CoreLayout(CoreForm.ThreeLimb, [new("L", 0.5), new("A"), new("B"), new("C"), new("R", 0.5)]);
+        var layout = CoreLayout.Of(CoreForm.FiveLimb);
         var core = CoreBuilder.Build(layout, [new(0.2, 0.11, 0.1), new(0.15, 0.085, 0.06)], 0.96, 0.5, 0.3, JointKind.StepLap);
         var butt = CoreBuilder.Build(layout, [new(0.2, 0.11, 0.1), new(0.15, 0.085, 0.06)], 0.96, 0.5, 0.3, JointKind.ButtLap);
 
-        Assert.Equal((3 * 0.2) + (2 * 0.1) + (4 * 0.3), core.OverallWidth_m, 1e-12);
+        Assert.Equal((3 * 0.2) + (2 * 0.1) + (2 * 0.3) + (2 * 0.15), core.OverallWidth_m, 1e-12);
+        Assert.Equal((0.15, 0.5), (core.ReturnWindowWidth_m, core.LimbPitch_m));
+        Assert.Equal(["R", "A", "B", "C", "S"], core.Limbs.Select(l => l.Letter));
         Assert.Contains(core.Parts, p => p.Name == "tZoneBTop");
         Assert.Equal(core.Parts.Sum(p => p.Volume_m3), core.Plates.Sum(p => p.NetVolume_m3), 1e-14);
         Assert.Equal(core.Parts.Sum(p => p.Volume_m3), butt.Plates.Sum(p => p.NetVolume_m3), 1e-14);
@@ -110,8 +111,29 @@ public sealed class CoreBuilderTests
         CoreStep[] low = [new(0.2, 0.09, 0.1)];
         Assert.Throws<GeometryException>(() => CoreBuilder.Build(CoreForm.ThreeLimb, low, 0.96, 0.5, 0.3, JointKind.MitredOverlap));
         Assert.NotEmpty(CoreBuilder.Build(CoreForm.ThreeLimb, low, 0.96, 0.5, 0.3, JointKind.ButtLap).Plates);
-        Assert.NotEmpty(CoreBuilder.Build(CoreForm.SinglePhaseTwoLimb, low, 0.96, 0.5, 0.3, JointKind.MitredOverlap).Plates);
+        foreach (var form in new[] { CoreForm.SinglePhaseTwoLimb, CoreForm.SinglePhaseThreeLimb, CoreForm.SinglePhaseFourLimb, CoreForm.FiveLimb })
+        {
+            Assert.NotEmpty(CoreBuilder.Build(form, low, 0.96, 0.5, 0.3, JointKind.MitredOverlap).Plates);
+        }
     }
+
+    [Fact]
+    public void Pitch_of_a_core_with_one_wound_limb_reaches_to_the_return_limb()
+    {
+        var core = CoreBuilder.Build(CoreForm.SinglePhaseThreeLimb, [new(0.2, 0.1, 0.1)], 0.96, 0.5, 0.3, JointKind.StepLap);
+        Assert.Equal(0.3 + 0.1 + 0.05, core.LimbPitch_m, 1e-15);
+        Assert.Equal((0.3, 0.2 + (2 * 0.1) + (2 * 0.3)), (core.ReturnWindowWidth_m, Math.Round(core.OverallWidth_m, 12)));
+        Assert.Equal(
+            ["limbR", "limbA", "limbS", "yokeRATop", "yokeASTop", "yokeRABottom", "yokeASBottom", "cornerRTop", "cornerRBottom", "cornerSTop", "cornerSBottom", "tZoneTop", "tZoneBottom"],
+            core.Parts.Select(p => p.Name));
+    }
+
+    [Theory]
+    [InlineData(0.19)]
+    [InlineData(1.6)]
+    [InlineData(double.NaN)]
+    public void Return_limb_out_of_range_is_refused_by_name(double share) =>
+        Assert.Equal("returnShare", Assert.Throws<GeometryException>(() => CoreLayout.Of(CoreForm.FiveLimb, share)).PropertyName);
 
     [Fact]
     public void Unknown_form_or_joint_is_refused_by_name()

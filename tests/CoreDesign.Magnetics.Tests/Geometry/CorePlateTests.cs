@@ -29,6 +29,29 @@ public sealed class CorePlateTests
     }
 
     [Fact]
+    public void Half_yoke_is_made_of_two_plates_that_meet_at_the_limbs_point()
+    {
+        var plates = One(CoreForm.SinglePhaseThreeLimb, limb: 0.2, yoke: 0.1, JointKind.StepLap);
+        var (outer, middle, yoke) = (plates[0], plates[1], plates[2]);
+
+        Assert.Equal((PlateShape.OuterLimb, 2, 0.1), (outer.Shape, outer.Pieces, outer.Width_m));
+        Assert.Equal([(0.1, 0), (0.6, 0), (0.7, 0.1), (0.6, 0.2), (0.1, 0.2), (0, 0.1)], Rounded(middle));
+        Assert.Equal((PlateShape.Yoke, 4, 0.5, 0.3), (yoke.Shape, yoke.Pieces, Round(yoke.LongSide_m), Round(yoke.ShortSide_m)));
+        Assert.Equal([(0, 0), (0.5, 0), (0.4, 0.1), (0.1, 0.1)], Rounded(yoke));
+        Assert.Equal(3, plates.Count);
+    }
+
+    [Fact]
+    public void Point_of_a_limb_is_cut_flat_at_the_outer_edge_of_a_lower_yoke()
+    {
+        var plates = One(CoreForm.FiveLimb, limb: 0.2, yoke: 0.08, JointKind.MitredOverlap);
+
+        Assert.Equal([(0.08, 0), (0.58, 0), (0.66, 0.08), (0.66, 0.12), (0.58, 0.2), (0.08, 0.2), (0, 0.12), (0, 0.08)], Rounded(plates[1]));
+        Assert.Equal([(4, 0.15), (4, 0.3)], plates.Skip(2).Select(p => (p.Pieces, Round(p.ShortSide_m))));
+        Assert.Equal([(0, 0), (0.46, 0), (0.38, 0.08), (0.08, 0.08)], Rounded(plates[3]));
+    }
+
+    [Fact]
     public void Butt_lapped_plates_are_rectangles_of_two_layers()
     {
         var plates = One(CoreForm.ThreeLimb, limb: 0.2, yoke: 0.24, JointKind.ButtLap);

@@ -5,18 +5,20 @@ using CsCheck;
 namespace CoreDesign.Magnetics.Tests.Geometry;
 
 /// <summary>Random buildable cores for the laws.</summary>
-internal sealed record Design(CoreForm Form, CoreStep[] Steps, double StackingFactor, double WindowHeight_m, double WindowWidth_m, JointKind Joint)
+internal sealed record Design(CoreForm Form, CoreStep[] Steps, double StackingFactor, double WindowHeight_m, double WindowWidth_m, JointKind Joint, double ReturnShare, double ReturnWindowWidth_m)
 {
-    public CoreGeometry Build(double scale = 1) => CoreBuilder.Build(Form, Scaled(scale), StackingFactor, scale * WindowHeight_m, scale * WindowWidth_m, Joint);
+    public CoreGeometry Build(double scale = 1) =>
+        CoreBuilder.Build(CoreLayout.Of(Form, ReturnShare), Scaled(scale), StackingFactor, scale * WindowHeight_m, scale * WindowWidth_m, Joint, scale * ReturnWindowWidth_m);
 
     private CoreStep[] Scaled(double scale) => [.. Steps.Select(s => new CoreStep(scale * s.LimbWidth_m, scale * s.YokeWidth_m, scale * s.Stack_m))];
 }
 
 internal static class Designs
 {
-    private static readonly Gen<CoreStep[]> Steps =
+    /// <summary>A three-limb core's yoke stays above half the limb; half-area yokes, which limbs part, and lower ones are tried on every other form.</summary>
+    private static Gen<CoreStep[]> Steps(CoreForm form) =>
         from widest in Gen.Double[0.08, 0.9]
-        from factor in Gen.Double[0.55, 1.8]
+        from factor in form == CoreForm.ThreeLimb ? Gen.Double[0.55, 1.8] : Gen.OneOf(Gen.Const(0.5), Gen.Double[0.2, 1.8])
         from falls in Gen.Select(Gen.Double[0.8, 0.98], Gen.Double[0.9, 1], Gen.Double[0.005, 0.1]).Array[1, 12]
         select Falling(widest, factor, falls);
 
@@ -24,11 +26,13 @@ internal static class Designs
     public static readonly Gen<Design> Any =
         from form in Gen.Enum<CoreForm>()
         from joint in Gen.Enum<JointKind>()
-        from steps in Steps
+        from steps in Steps(form)
         from stacking in Gen.Double[0.9, 1]
         from height in Gen.Double[0.05, 3]
         from width in Gen.Double[0.02, 1]
-        select new Design(form, steps, stacking, height, width, joint);
+        from share in Gen.OneOf(Gen.Const(0.5), Gen.Double[0.25, 1.4])
+        from returnWidth in Gen.Double[0.02, 0.6]
+        select new Design(form, steps, stacking, height, width, joint, share, returnWidth);
 
     private static CoreStep[] Falling(double widest, double factor, (double Limb, double Yoke, double Stack)[] falls)
     {
