@@ -11,27 +11,35 @@ public static class LineCurrents
     public static IReadOnlyList<(string Name, double[] Current_A)> Of(CircuitSolution solution)
     {
         ArgumentNullException.ThrowIfNull(solution);
-        var windings = solution.Circuit.Windings;
+        return Of(solution.Circuit, solution.WindingCurrent_A);
+    }
+
+    /// <summary>The same rule for currents of any span of time; first index is the winding.</summary>
+    public static IReadOnlyList<(string Name, double[] Current_A)> Of(MagneticCircuit circuit, IReadOnlyList<double[]> current_A)
+    {
+        ArgumentNullException.ThrowIfNull(circuit);
+        ArgumentNullException.ThrowIfNull(current_A);
+        var windings = circuit.Windings;
         double[] Of(WindingPhase phase)
         {
             for (var w = 0; w < windings.Count; w++)
             {
                 if (windings[w].Phase == phase)
                 {
-                    return solution.WindingCurrent_A[w];
+                    return current_A[w];
                 }
             }
 
             throw new CircuitException($"There is no winding of phase {phase}.");
         }
 
-        if (solution.Circuit.Supply.Connection == SupplyConnection.Single)
+        if (circuit.Supply.Connection == SupplyConnection.Single)
         {
             return [("L", Of(WindingPhase.Single))];
         }
 
         double[] a = Of(WindingPhase.A), b = Of(WindingPhase.B), c = Of(WindingPhase.C);
-        return solution.Circuit.Supply.Connection == SupplyConnection.Delta
+        return circuit.Supply.Connection == SupplyConnection.Delta
             ? [("A", Less(a, c)), ("B", Less(b, a)), ("C", Less(c, b))]
             : [("A", a), ("B", b), ("C", c)];
     }
