@@ -206,6 +206,13 @@ internal sealed class InstantSolver
             _residual[row] += winding.Resistance_ohm * z[row];
             _jacobian[row, row] = winding.Resistance_ohm;
         }
+        else if (w is null && winding.Resistance_ohm > 0)
+        {
+            // A first guess only, but without the resistance in some form a closed delta beside imposed fluxes has no current of its own: R i held over 1/omega.
+            var slow = winding.Resistance_ohm / (2 * Math.PI * _circuit.Supply.Frequency_Hz);
+            _residual[row] += slow * z[row];
+            _jacobian[row, row] = slow;
+        }
 
         if (star)
         {
