@@ -13,7 +13,7 @@ internal static class ShareShape
     {
         var s = core.Solution;
         var current = CurrentOf(s);
-        var extra = CurrentOf(s, (b, t) => s.Circuit.Branches[b].ExtraLoss_A_s_per_Wb * s.FluxRate_Wb_per_s[b][t]);
+        var extra = CurrentOf(s, (b, t) => s.ExtraLossCoefficient(b) * s.FluxRate_Wb_per_s[b][t]);
         var kinds = core.Core.Geometry.Parts.ToDictionary(p => p.Name, p => p.Kind, StringComparer.Ordinal);
         (string Cause, string Label, Func<string, bool> Has)[] steel =
         [

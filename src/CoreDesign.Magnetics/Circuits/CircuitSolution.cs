@@ -2,45 +2,165 @@ namespace CoreDesign.Magnetics.Circuits;
 
 /// <summary>
 /// Periodic steady state of a circuit. Arrays run over one period, equal spacing from t = 0; first index is the branch or
-/// winding in the circuit's order.
+/// winding in the circuit's order. Waveforms of branches are written out when they are asked for.
 /// </summary>
-public sealed record CircuitSolution
+public sealed class CircuitSolution
 {
-    public required MagneticCircuit Circuit { get; init; }
-    public required int Points { get; init; }
-    public required double[][] Flux_Wb { get; init; }
-    public required double[][] FluxRate_Wb_per_s { get; init; }
+    private readonly SolverRun _run;
+    private readonly PathPlace[] _places;
+    private readonly PathWaves[] _paths;
+    private double[][]? _flux;
+    private double[][]? _rate;
+    private double[][]? _mmf;
+
+    internal CircuitSolution(SolverRun run, PathWaves[] paths, double[][] current)
+    {
+        _run = run;
+        _places = run.Prepared.Places;
+        _paths = paths;
+        var n = _places.Length;
+        HysteresisLoss_W = new double[n];
+        ClassicalLoss_W = new double[n];
+        ExcessLoss_W = new double[n];
+        ExtraLoss_W = new double[n];
+        for (var b = 0; b < n; b++)
+        {
+            var (branch, place) = (Circuit.Branches[b], _places[b]);
+            ExtraLoss_W[b] = run.BranchExtra(b) * paths[place.Path].MeanSquareRate;
+            if (place.Steel >= 0)
+            {
+                var heat = paths[place.Path].Heat[place.Steel];
+                var volume = branch.Area_m2 * branch.Length_m;
+                HysteresisLoss_W[b] = heat.Hysteresis_W_per_m3 * volume;
+                ClassicalLoss_W[b] = heat.Classical_W_per_m3 * volume;
+                ExcessLoss_W[b] = heat.Excess_W_per_m3 * volume;
+            }
+
+            CoreLoss_W += BranchLoss_W(b);
+        }
+
+        WindingCurrent_A = new double[current.Length][];
+        for (var w = 0; w < current.Length; w++)
+        {
+            WindingCurrent_A[w] = Signed(current[w], 1);
+            var winding = Circuit.Windings[w];
+            var (re, im) = SupplyWaveform.Linkage(run.Supply, winding.Phase);
+            double power = 0, squares = 0;
+            var table = Excitation.PeriodTable.Of(Points);
+            for (var t = 0; t < current[w].Length; t++)
+            {
+                power -= ((re * table.Sin[t]) + (im * table.Cos[t])) * current[w][t];
+                squares += current[w][t] * current[w][t];
+            }
+
+            TerminalPower_W += 2 * Math.PI * run.Supply.Frequency_Hz * power / current[w].Length;
+            CopperLoss_W += winding.Resistance_ohm * squares / current[w].Length;
+        }
+    }
+
+    /// <summary>The circuit as it was prepared; <see cref="Supply"/> says at which voltage it was solved.</summary>
+    public MagneticCircuit Circuit => _run.Circuit;
+
+    public Supply Supply => _run.Supply;
+
+    public int Points => _run.Points;
+
+    public double[][] Flux_Wb => _flux ??= Array.ConvertAll(_places, p => Signed(_paths[p.Path].Flux_Wb, p.Sign));
+
+    public double[][] FluxRate_Wb_per_s => _rate ??= Array.ConvertAll(_places, p => Signed(_paths[p.Path].Rate_Wb_per_s, p.Sign));
 
     /// <summary>MMF drop of each branch, without its windings.</summary>
-    public required double[][] Mmf_A { get; init; }
-    public required double[][] WindingCurrent_A { get; init; }
+    public double[][] Mmf_A => _mmf ??= [.. Enumerable.Range(0, _places.Length).Select(BranchMmf)];
 
-    /// <summary>Heat of the hysteresis stops, counted stop by stop; independent of the terminal power.</summary>
-    public required double[] HysteresisLoss_W { get; init; }
-    public required double[] ClassicalLoss_W { get; init; }
-    public required double[] ExcessLoss_W { get; init; }
+    public double[][] WindingCurrent_A { get; }
+
+    /// <summary>Heat of hysteresis, counted along the path of the flux; independent of the terminal power.</summary>
+    public double[] HysteresisLoss_W { get; }
+
+    public double[] ClassicalLoss_W { get; }
+
+    public double[] ExcessLoss_W { get; }
 
     /// <summary>Heat of the extra-loss term.</summary>
-    public required double[] ExtraLoss_W { get; init; }
-    public required double CopperLoss_W { get; init; }
-    public required double TerminalPower_W { get; init; }
+    public double[] ExtraLoss_W { get; }
+
+    public double CopperLoss_W { get; }
+
+    public double TerminalPower_W { get; }
 
     /// <summary>Branch flux per winding linkage (branches by windings), where the linkages alone settle every flux; else null.</summary>
-    public double[,]? FluxPerLinkage { get; init; }
+    public double[,]? FluxPerLinkage => _run.Prepared.FluxesImposed ? _run.Reduction.PerLinkage : null;
 
-    public double CoreLoss_W => HysteresisLoss_W.Sum() + ClassicalLoss_W.Sum() + ExcessLoss_W.Sum() + ExtraLoss_W.Sum();
+    public double CoreLoss_W { get; }
 
     public double BranchLoss_W(int branch) =>
         HysteresisLoss_W[branch] + ClassicalLoss_W[branch] + ExcessLoss_W[branch] + ExtraLoss_W[branch];
 
-    public double PeakFluxDensity_T(int branch)
+    public double PeakFluxDensity_T(int branch) => _paths[_places[branch].Path].Peak_Wb / Circuit.Branches[branch].Area_m2;
+
+    /// <summary>Extra-loss coefficient of a branch in this solve, A s/Wb.</summary>
+    public double ExtraLossCoefficient(int branch) => _run.BranchExtra(branch);
+
+    /// <summary>Mean square of the flux rate of a branch, Wb²/s²: what an extra loss of one A s/Wb costs in W.</summary>
+    public double MeanSquareRate(int branch) => _paths[_places[branch].Path].MeanSquareRate;
+
+    /// <summary>The steady state with other extra losses. Where linkages settle the fluxes only the currents change, and nothing is solved again.</summary>
+    public CircuitSolution WithExtraLoss(double[] extraLoss_A_s_per_Wb, CancellationToken cancel = default)
     {
-        var peak = 0.0;
-        foreach (var f in Flux_Wb[branch])
+        ArgumentNullException.ThrowIfNull(extraLoss_A_s_per_Wb);
+        if (!_run.Prepared.FluxesImposed)
         {
-            peak = Math.Max(peak, Math.Abs(f));
+            return _run.Prepared.Solve(_run.Supply.Voltage_V, extraLoss_A_s_per_Wb, _run.Options, cancel);
         }
 
-        return peak / Circuit.Branches[branch].Area_m2;
+        var run = _run.With(extraLoss_A_s_per_Wb);
+        var paths = new PathWaves[_paths.Length];
+        for (var p = 0; p < paths.Length; p++)
+        {
+            paths[p] = _paths[p].With(run.PathExtra[p]);
+        }
+
+        return new CircuitSolution(run, paths, run.Currents(paths, []));
+    }
+
+    private double[] BranchMmf(int b)
+    {
+        var (branch, place, extra) = (Circuit.Branches[b], _places[b], _run.BranchExtra(b));
+        var path = _paths[place.Path];
+        var mmf = new double[path.Mmf_A.Length];
+        for (var t = 0; t < mmf.Length; t++)
+        {
+            // The path's direction; the sign comes last.
+            mmf[t] = (branch.Reluctance_A_per_Wb * path.Flux_Wb[t]) + (extra * path.Rate_Wb_per_s[t]);
+        }
+
+        if (place.Steel >= 0)
+        {
+            path.Fields[place.Steel].AddTo(mmf, branch.Length_m);
+        }
+
+        if (place.Joint >= 0)
+        {
+            path.JointMmf[place.Joint].AddTo(mmf, 1);
+        }
+
+        return Signed(mmf, place.Sign);
+    }
+
+    /// <summary>The whole period from half of it or all of it.</summary>
+    private double[] Signed(double[] x, int sign)
+    {
+        var whole = new double[Points];
+        for (var t = 0; t < x.Length; t++)
+        {
+            whole[t] = sign * x[t];
+        }
+
+        for (var t = x.Length; t < Points; t++)
+        {
+            whole[t] = -whole[t - x.Length];
+        }
+
+        return whole;
     }
 }

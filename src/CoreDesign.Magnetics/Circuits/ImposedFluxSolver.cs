@@ -1,68 +1,88 @@
-using MathNet.Numerics.LinearAlgebra;
+using CoreDesign.Magnetics.Excitation;
+using CoreDesign.Magnetics.Materials;
 
 namespace CoreDesign.Magnetics.Circuits;
 
 /// <summary>
-/// Circuits whose every flux follows from the windings' linkages (as many loops as windings, no resistance): fluxes and their rates are
-/// exact, fields are evaluated point by point, currents follow from one constant matrix. No iteration.
+/// Circuits whose every flux follows from the windings' linkages: fluxes are sines and exact, fields are evaluated point by point, currents follow from
+/// one constant matrix. No iteration. Equal sines that differ by a whole number of points, as those of three phases do, are evaluated once.
 /// </summary>
 internal static class ImposedFluxSolver
 {
-    public static CircuitSolution Solve(MagneticCircuit circuit, CircuitTopology topology, SolverOptions options)
+    public static CircuitSolution Solve(SolverRun run)
     {
-        int n = options.PointsPerPeriod, b = circuit.Branches.Count, k = circuit.Windings.Count;
-        var inverse = Matrix<double>.Build.DenseOfArray(topology.Linkages).Inverse();
-        var fluxPerLinkage = (Matrix<double>.Build.DenseOfArray(topology.Loops) * inverse).ToArray();
-        var linkage = circuit.Windings.Select(w => SupplyWaveform.Linkage(circuit.Supply, w.Phase, n)).ToArray();
-        var voltage = circuit.Windings.Select(w => SupplyWaveform.Voltage(circuit.Supply, w.Phase, n)).ToArray();
-
-        var flux = Combine(fluxPerLinkage, linkage, n);
-        var rate = Combine(fluxPerLinkage, voltage, n);
-        var evaluation = new BranchEvaluation(circuit, n);
-        for (var i = 0; i < b; i++)
+        var options = run.Options;
+        var f = run.Supply.Frequency_Hz;
+        var waves = new List<(object Law, double Amplitude, double Phase, double[] Values, SteelWave? Heat)>();
+        var span = run.Span;
+        var table = PeriodTable.Of(options.PointsPerPeriod);
+        var paths = new PathWaves[run.Paths.Length];
+        for (var p = 0; p < paths.Length; p++)
         {
-            evaluation.Run(i, flux[i], rate[i]);
+            var path = paths[p] = new PathWaves(run.Paths[p], span);
+            run.Impose(p, path.Flux_Wb, path.Rate_Wb_per_s);
+            if (run.HasOffset)
+            {
+                path.FillPieces(options.PointsPerPeriod, f);
+            }
+            else
+            {
+                var (re, im) = run.FluxPhasor(p);
+                path.Peak_Wb = Math.Sqrt((re * re) + (im * im));
+                FillPieces(path, Math.Atan2(im, re));
+            }
+
+            path.SumUp(run.PathExtra[p]);
         }
 
-        var current = new double[k][];
-        for (var w = 0; w < k; w++)
-        {
-            current[w] = new double[n];
-            for (var i = 0; i < b; i++)
-            {
-                var g = fluxPerLinkage[i, w];
-                if (g == 0)
-                {
-                    continue;
-                }
+        return new CircuitSolution(run, paths, run.Currents(paths, []));
 
-                var mmf = evaluation.Mmf_A[i];
-                for (var t = 0; t < n; t++)
-                {
-                    current[w][t] += g * mmf[t];
-                }
+        void FillPieces(PathWaves path, double phase)
+        {
+            for (var i = 0; i < path.Fields.Length; i++)
+            {
+                var piece = path.Path.Steel[i];
+                (path.Fields[i], path.Heat[i]) = Wave(piece.Law, path.Peak_Wb / piece.Area_m2, phase)!;
+            }
+
+            for (var i = 0; i < path.JointMmf.Length; i++)
+            {
+                var piece = path.Path.Joints[i];
+                path.JointMmf[i] = Wave(piece.Curve, path.Peak_Wb / piece.Area_m2, phase).Wave;
             }
         }
 
-        return evaluation.Solution(flux, rate, current, voltage) with { FluxPerLinkage = fluxPerLinkage };
+        (SharedWave Wave, SteelWave Heat) Wave(object law, double amplitude, double phase)
+        {
+            if (options.UseSymmetry)
+            {
+                foreach (var known in waves)
+                {
+                    var shift = (phase - known.Phase) * options.PointsPerPeriod / (2 * Math.PI);
+                    if (ReferenceEquals(known.Law, law) && Math.Abs(known.Amplitude - amplitude) <= 1e-12 * amplitude && Math.Abs(shift - Math.Round(shift)) < 1e-8)
+                    {
+                        var points = (int)Math.Round(shift) % options.PointsPerPeriod;
+                        return (new SharedWave(known.Values, points < 0 ? points + options.PointsPerPeriod : points, options.PointsPerPeriod), known.Heat!);
+                    }
+                }
+            }
+
+            var heat = law is SheetLaw sheet ? SteelWave.OfSine(sheet, amplitude, phase, span, options.PointsPerPeriod, f) : null;
+            var values = heat?.Field_A_per_m ?? OfSine((MonotoneCurve)law, amplitude, phase, span, table);
+            waves.Add((law, amplitude, phase, values, heat));
+            return (new SharedWave(values, 0, options.PointsPerPeriod), heat!);
+        }
     }
 
-    private static double[][] Combine(double[,] weights, double[][] waves, int n)
+    private static double[] OfSine(MonotoneCurve curve, double amplitude, double phase, int span, PeriodTable table)
     {
-        var result = new double[weights.GetLength(0)][];
-        for (var i = 0; i < result.Length; i++)
+        var (sin, cos) = Math.SinCos(phase);
+        var values = new double[span];
+        for (var t = 0; t < span; t++)
         {
-            var x = result[i] = new double[n];
-            for (var w = 0; w < waves.Length; w++)
-            {
-                var g = weights[i, w];
-                for (var t = 0; g != 0 && t < n; t++)
-                {
-                    x[t] += g * waves[w][t];
-                }
-            }
+            values[t] = curve.Value(amplitude * ((table.Cos[t] * cos) - (table.Sin[t] * sin)));
         }
 
-        return result;
+        return values;
     }
 }

@@ -56,7 +56,11 @@ public enum WindingPhase
 }
 
 /// <summary>A winding: coils in series and a resistance.</summary>
-public sealed record Winding(string Name, WindingPhase Phase, IReadOnlyList<Coil> Coils, double Resistance_ohm = 0);
+public sealed record Winding(string Name, WindingPhase Phase, IReadOnlyList<Coil> Coils, double Resistance_ohm = 0)
+{
+    /// <summary>Constant part of the linkage, as direct current leaves it; only without resistance, where it could not stay.</summary>
+    public double LinkageOffset_Wb { get; init; }
+}
 
 /// <summary>A nonlinear magnetic circuit with its windings and supply.</summary>
 public sealed record MagneticCircuit(Supply Supply, IReadOnlyList<CircuitBranch> Branches, IReadOnlyList<Winding> Windings);

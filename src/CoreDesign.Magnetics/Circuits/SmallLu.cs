@@ -1,10 +1,10 @@
 namespace CoreDesign.Magnetics.Circuits;
 
-/// <summary>In-place Gaussian elimination with row scaling and partial pivoting, for the small dense systems of one instant; no allocation.</summary>
+/// <summary>Gauss elimination for the few equations of one instant, in place; rows are scaled so that fluxes and ampere-turns mix.</summary>
 internal static class SmallLu
 {
-    /// <summary>Solves a·x = b; the answer is left in <paramref name="b"/>, <paramref name="a"/> is destroyed. False where singular.</summary>
-    public static bool Solve(double[,] a, double[] b, double[] work)
+    /// <summary>Solves a·x = b; a (row by row) and b are overwritten, b with x. False where a pivot is zero.</summary>
+    public static bool Solve(double[] a, double[] b, double[] work)
     {
         var n = b.Length;
         for (var i = 0; i < n; i++)
@@ -12,7 +12,7 @@ internal static class SmallLu
             var largest = 0.0;
             for (var j = 0; j < n; j++)
             {
-                largest = Math.Max(largest, Math.Abs(a[i, j]));
+                largest = Math.Max(largest, Math.Abs(a[(i * n) + j]));
             }
 
             if (largest == 0 || !double.IsFinite(largest))
@@ -28,13 +28,13 @@ internal static class SmallLu
             var pivot = c;
             for (var i = c + 1; i < n; i++)
             {
-                if (Math.Abs(a[i, c]) * work[i] > Math.Abs(a[pivot, c]) * work[pivot])
+                if (Math.Abs(a[(i * n) + c]) * work[i] > Math.Abs(a[(pivot * n) + c]) * work[pivot])
                 {
                     pivot = i;
                 }
             }
 
-            if (a[pivot, c] == 0)
+            if (a[(pivot * n) + c] == 0)
             {
                 return false;
             }
@@ -43,7 +43,7 @@ internal static class SmallLu
             {
                 for (var j = c; j < n; j++)
                 {
-                    (a[c, j], a[pivot, j]) = (a[pivot, j], a[c, j]);
+                    (a[(c * n) + j], a[(pivot * n) + j]) = (a[(pivot * n) + j], a[(c * n) + j]);
                 }
 
                 (b[c], b[pivot]) = (b[pivot], b[c]);
@@ -52,7 +52,7 @@ internal static class SmallLu
 
             for (var i = c + 1; i < n; i++)
             {
-                var f = a[i, c] / a[c, c];
+                var f = a[(i * n) + c] / a[(c * n) + c];
                 if (f == 0)
                 {
                     continue;
@@ -60,7 +60,7 @@ internal static class SmallLu
 
                 for (var j = c + 1; j < n; j++)
                 {
-                    a[i, j] -= f * a[c, j];
+                    a[(i * n) + j] -= f * a[(c * n) + j];
                 }
 
                 b[i] -= f * b[c];
@@ -72,10 +72,10 @@ internal static class SmallLu
             var s = b[i];
             for (var j = i + 1; j < n; j++)
             {
-                s -= a[i, j] * b[j];
+                s -= a[(i * n) + j] * b[j];
             }
 
-            b[i] = s / a[i, i];
+            b[i] = s / a[(i * n) + i];
         }
 
         return true;

@@ -3,17 +3,19 @@ namespace CoreDesign.Magnetics.Circuits;
 /// <summary>Voltage across each winding, by the connection's rule.</summary>
 internal static class SupplyWaveform
 {
-    public static double[] Voltage(Supply supply, WindingPhase phase, int points)
+    public static double[] Voltage(Supply supply, WindingPhase phase, int points, int span)
     {
         var (peak, angle) = Across(supply, phase);
-        return Sample(points, peak, angle);
+        return Sample(points, span, peak, angle);
     }
 
-    /// <summary>Zero-mean integral of the voltage, Wb.</summary>
-    public static double[] Linkage(Supply supply, WindingPhase phase, int points)
+    /// <summary>Zero-mean integral of the voltage, Wb: re·cos(wt) - im·sin(wt).</summary>
+    public static (double Re, double Im) Linkage(Supply supply, WindingPhase phase)
     {
         var (peak, angle) = Across(supply, phase);
-        return Sample(points, peak / (2 * Math.PI * supply.Frequency_Hz), angle - (Math.PI / 2));
+        var (sin, cos) = Math.SinCos(angle - (Math.PI / 2));
+        var w = 2 * Math.PI * supply.Frequency_Hz;
+        return (peak / w * cos, peak / w * sin);
     }
 
     /// <summary>Peak and phase of the voltage that the supply puts across a winding; a star winding's is to the supply's neutral.</summary>
@@ -31,12 +33,14 @@ internal static class SupplyWaveform
         };
     }
 
-    private static double[] Sample(int points, double peak, double angle)
+    private static double[] Sample(int points, int span, double peak, double angle)
     {
-        var x = new double[points];
-        for (var n = 0; n < points; n++)
+        var table = Excitation.PeriodTable.Of(points);
+        var (sin, cos) = Math.SinCos(angle);
+        var x = new double[span];
+        for (var n = 0; n < span; n++)
         {
-            x[n] = peak * Math.Cos((2 * Math.PI * n / points) + angle);
+            x[n] = peak * ((table.Cos[n] * cos) - (table.Sin[n] * sin));
         }
 
         return x;

@@ -92,10 +92,6 @@ public sealed class CoreCircuit
         return new MagneticCircuit(excitation.Supply, Branches, windings);
     }
 
-    /// <summary>The same core with an extra-loss coefficient on each branch.</summary>
-    public CoreCircuit WithExtraLoss(IReadOnlyList<double> extra_A_s_per_Wb) =>
-        new(Geometry, [.. Branches.Select((b, i) => b with { ExtraLoss_A_s_per_Wb = extra_A_s_per_Wb[i] })], Parts, Limbs);
-
     private static IEnumerable<CircuitBranch> SteelBranches(CorePart part, SheetLaw steel, List<string> letters)
     {
         CircuitBranch Branch(string name, string from, string to, double share = 1) => new()

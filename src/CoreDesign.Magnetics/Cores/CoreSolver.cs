@@ -1,5 +1,4 @@
 using CoreDesign.Magnetics.Circuits;
-using CoreDesign.Magnetics.Excitation;
 using CoreDesign.Magnetics.Geometry;
 
 namespace CoreDesign.Magnetics.Cores;
@@ -36,12 +35,10 @@ public static class CoreSolver
         var coefficients = new double[core.Branches.Count];
         foreach (var b in zones)
         {
-            var rate = Waveform.Rms(bare.FluxRate_Wb_per_s[b]);
-            coefficients[b] = extra * bare.BranchLoss_W(b) / zoneLoss / (rate * rate);
+            coefficients[b] = extra * bare.BranchLoss_W(b) / zoneLoss / bare.MeanSquareRate(b);
         }
 
-        var laden = core.WithExtraLoss(coefficients);
-        return new CoreSolution(laden, CircuitSolver.Solve(laden.With(excitation), options, cancel));
+        return new CoreSolution(core, bare.WithExtraLoss(coefficients, cancel));
     }
 
     private static List<int> ZoneBranches(CoreCircuit core)

@@ -6,7 +6,7 @@ public readonly record struct Harmonic(int Order, double Amplitude, double Phase
 /// <summary>Figures of a periodic waveform sampled at equal spacing over one period from t = 0.</summary>
 public static class Waveform
 {
-    public static double Rms(IReadOnlyList<double> x)
+    public static double Rms(double[] x)
     {
         ArgumentNullException.ThrowIfNull(x);
         var s = 0.0;
@@ -15,10 +15,10 @@ public static class Waveform
             s += v * v;
         }
 
-        return Math.Sqrt(s / x.Count);
+        return Math.Sqrt(s / x.Length);
     }
 
-    public static double Mean(IReadOnlyList<double> x)
+    public static double Mean(double[] x)
     {
         ArgumentNullException.ThrowIfNull(x);
         var s = 0.0;
@@ -27,10 +27,10 @@ public static class Waveform
             s += v;
         }
 
-        return s / x.Count;
+        return s / x.Length;
     }
 
-    public static double Peak(IReadOnlyList<double> x)
+    public static double Peak(double[] x)
     {
         ArgumentNullException.ThrowIfNull(x);
         var p = 0.0;
@@ -43,26 +43,53 @@ public static class Waveform
     }
 
     /// <summary>Harmonics 1 to <paramref name="highest"/> by the discrete Fourier sum; orders must stay below half the number of points.</summary>
-    public static Harmonic[] Harmonics(IReadOnlyList<double> x, int highest)
+    public static Harmonic[] Harmonics(double[] x, int highest)
     {
         ArgumentNullException.ThrowIfNull(x);
-        ArgumentOutOfRangeException.ThrowIfGreaterThanOrEqual(highest, x.Count / 2);
+        var n = x.Length;
+        ArgumentOutOfRangeException.ThrowIfGreaterThanOrEqual(highest, n / 2);
+        var table = PeriodTable.Of(n);
         var result = new Harmonic[highest];
+
+        // What repeats with the opposite sign after half a period has odd orders only, and half the sum says all.
+        var halfWave = n % 2 == 0 && RepeatsTurned(x);
+        var span = halfWave ? n / 2 : n;
         for (var h = 1; h <= highest; h++)
         {
-            double re = 0, im = 0;
-            for (var n = 0; n < x.Count; n++)
+            if (halfWave && h % 2 == 0)
             {
-                var (sin, cos) = Math.SinCos(2 * Math.PI * ((long)h * n % x.Count) / x.Count);
-                re += x[n] * cos;
-                im -= x[n] * sin;
+                result[h - 1] = new Harmonic(h, 0, 0);
+                continue;
             }
 
-            re *= 2.0 / x.Count;
-            im *= 2.0 / x.Count;
+            double re = 0, im = 0;
+            for (int t = 0, k = 0; t < span; t++)
+            {
+                re += x[t] * table.Cos[k];
+                im -= x[t] * table.Sin[k];
+                k += h;
+                k -= k >= n ? n : 0;
+            }
+
+            re *= 2.0 / span;
+            im *= 2.0 / span;
             result[h - 1] = new Harmonic(h, Math.Sqrt((re * re) + (im * im)), Math.Atan2(im, re) * 180 / Math.PI);
         }
 
         return result;
+    }
+
+    private static bool RepeatsTurned(double[] x)
+    {
+        var half = x.Length / 2;
+        for (var t = 0; t < half; t++)
+        {
+            if (x[t] != -x[t + half])
+            {
+                return false;
+            }
+        }
+
+        return true;
     }
 }

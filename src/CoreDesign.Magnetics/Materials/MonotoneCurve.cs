@@ -1,3 +1,5 @@
+using System.Runtime.CompilerServices;
+
 namespace CoreDesign.Magnetics.Materials;
 
 /// <summary>
@@ -8,10 +10,10 @@ namespace CoreDesign.Magnetics.Materials;
 /// </summary>
 public sealed class MonotoneCurve
 {
-    private readonly double[] _x;
-    private readonly double[] _y;
-    private readonly double[] _slope;
-    private readonly double _endSlope;
+    private const int MostBins = 4096;
+    private readonly Piece[] _pieces;
+    private readonly ushort[] _bins;
+    private readonly double _binsPerX;
 
     /// <param name="x">Strictly increasing, all above zero.</param>
     /// <param name="y">Increasing or level, none below zero, as many as <paramref name="x"/>.</param>
@@ -22,7 +24,7 @@ public sealed class MonotoneCurve
     {
         ArgumentNullException.ThrowIfNull(x);
         ArgumentNullException.ThrowIfNull(y);
-        if (x.Count != y.Count || x.Count < 1)
+        if (x.Count != y.Count || x.Count < 1 || x.Count > ushort.MaxValue - 2)
         {
             throw new ArgumentException($"A curve needs as many y as x and at least one point; got {x.Count} and {y.Count}.", nameof(y));
         }
@@ -37,70 +39,79 @@ public sealed class MonotoneCurve
         }
 
         // The slope at the origin needs its neighbour on the negative side; by oddness that secant equals the first one.
-        _x = new double[n + 1];
-        _y = new double[n + 1];
-        for (var i = 0; i < n; i++)
-        {
-            _x[i + 1] = x[i];
-            _y[i + 1] = y[i];
-        }
+        double[] xs = [0, .. x], ys = [0, .. y];
+        _pieces = Pieces(xs, ys, Slopes(xs, ys), endSlope);
+        (LastX, LastY) = (xs[^1], ys[^1]);
 
-        _endSlope = endSlope;
-        _slope = Slopes(_x, _y);
+        // Bins of equal width lead to the piece at their left end; a step or two from there finds the right one.
+        var bins = Math.Clamp(4 * n, 16, MostBins);
+        _binsPerX = bins / LastX;
+        _bins = new ushort[bins + 1];
+        for (int k = 0, i = 0; k <= bins; k++)
+        {
+            while (_pieces[i + 1].X <= k / _binsPerX)
+            {
+                i++;
+            }
+
+            // One piece early where rounding could put a point below the bin's edge into the bin.
+            _bins[k] = (ushort)Math.Max(0, i - (_pieces[i].X == k / _binsPerX ? 1 : 0));
+        }
     }
 
     /// <summary>Largest abscissa of the table.</summary>
-    public double LastX => _x[^1];
+    public double LastX { get; }
 
     /// <summary>Ordinate at <see cref="LastX"/>.</summary>
-    public double LastY => _y[^1];
+    public double LastY { get; }
 
     /// <summary>Value at <paramref name="x"/>, odd in it.</summary>
-    public double Value(double x) => Value(x, out _);
+    public double Value(double x)
+    {
+        var a = Math.Abs(x);
+        ref readonly var p = ref At(a);
+        var t = a - p.X;
+        return Math.CopySign(1, x) * (p.C0 + (t * (p.C1 + (t * (p.C2 + (t * p.C3))))));
+    }
 
     /// <summary>Value and slope at <paramref name="x"/>.</summary>
     public double Value(double x, out double slope)
     {
         var a = Math.Abs(x);
-        double v;
-        if (a >= _x[^1])
-        {
-            slope = _endSlope;
-            v = _y[^1] + ((a - _x[^1]) * _endSlope);
-        }
-        else
-        {
-            var i = Interval(a);
-            var h = _x[i + 1] - _x[i];
-            var s = (a - _x[i]) / h;
-            var secant = (_y[i + 1] - _y[i]) / h;
-            var c2 = (3 * secant) - (2 * _slope[i]) - _slope[i + 1];
-            var c3 = _slope[i] + _slope[i + 1] - (2 * secant);
-            v = _y[i] + (h * s * (_slope[i] + (s * (c2 + (s * c3)))));
-            slope = _slope[i] + (s * ((2 * c2) + (3 * s * c3)));
-        }
-
-        return x < 0 ? -v : v;
+        ref readonly var p = ref At(a);
+        var t = a - p.X;
+        slope = p.C1 + (t * ((2 * p.C2) + (3 * t * p.C3)));
+        return Math.CopySign(1, x) * (p.C0 + (t * (p.C1 + (t * (p.C2 + (t * p.C3))))));
     }
 
-    private int Interval(double a)
+    [MethodImpl(MethodImplOptions.AggressiveInlining)]
+    private ref readonly Piece At(double a)
     {
-        var lo = 0;
-        var hi = _x.Length - 1;
-        while (hi - lo > 1)
+        var pieces = _pieces;
+        int i = a < LastX ? _bins[(int)(a * _binsPerX)] : pieces.Length - 2;
+        while (a >= pieces[i + 1].X)
         {
-            var mid = (lo + hi) >> 1;
-            if (_x[mid] <= a)
-            {
-                lo = mid;
-            }
-            else
-            {
-                hi = mid;
-            }
+            i++;
         }
 
-        return lo;
+        return ref pieces[i];
+    }
+
+    /// <summary>One cubic for each interval, then the straight end, then a guard that no argument reaches.</summary>
+    private static Piece[] Pieces(double[] x, double[] y, double[] slope, double endSlope)
+    {
+        var n = x.Length;
+        var pieces = new Piece[n + 1];
+        for (var i = 0; i + 1 < n; i++)
+        {
+            var h = x[i + 1] - x[i];
+            var secant = (y[i + 1] - y[i]) / h;
+            pieces[i] = new(x[i], y[i], slope[i], ((3 * secant) - (2 * slope[i]) - slope[i + 1]) / h, (slope[i] + slope[i + 1] - (2 * secant)) / (h * h));
+        }
+
+        pieces[n - 1] = new(x[^1], y[^1], endSlope, 0, 0);
+        pieces[n] = new(double.PositiveInfinity, 0, 0, 0, 0);
+        return pieces;
     }
 
     private static double[] Slopes(double[] x, double[] y)
@@ -133,4 +144,6 @@ public sealed class MonotoneCurve
 
         return d;
     }
+
+    private readonly record struct Piece(double X, double C0, double C1, double C2, double C3);
 }

@@ -24,6 +24,7 @@ public sealed class SheetLaw
         Excess = excess;
         ExcessFloor_T_per_s = excessFloor_T_per_s;
         Stops = [.. stops];
+        Together = new StopCurve(Stops);
     }
 
     /// <summary>Single-valued part H(B).</summary>
@@ -39,6 +40,9 @@ public sealed class SheetLaw
     public double ExcessFloor_T_per_s { get; }
 
     public HysteresisStop[] Stops { get; }
+
+    /// <summary>The stops as one curve.</summary>
+    public StopCurve Together { get; }
 
     /// <summary>True where the field depends on the rate of change.</summary>
     public bool HasRate => Eddy_A_s_per_m_T > 0 || Excess > 0;

@@ -19,7 +19,7 @@ internal sealed class TransientInstant
     private readonly int _m;
     private readonly int _k;
     private readonly bool _star;
-    private readonly double[,] _jacobian;
+    private readonly double[] _jacobian;
     private readonly double[] _residual;
     private readonly double[] _work;
     private readonly double[] _mmf;
@@ -30,7 +30,7 @@ internal sealed class TransientInstant
         _states = [.. circuit.Branches.Select(b => new BranchState(b))];
         (_m, _k, _star) = (topology.LoopCount, circuit.Windings.Count, circuit.Supply.Connection == SupplyConnection.StarIsolated);
         Size = _m + _k + (_star ? 1 : 0);
-        (_jacobian, _residual, _work, _mmf) = (new double[Size, Size], new double[Size], new double[Size], new double[_states.Length]);
+        (_jacobian, _residual, _work, _mmf) = (new double[Size * Size], new double[Size], new double[Size], new double[_states.Length]);
     }
 
     public int Size { get; }
@@ -121,8 +121,7 @@ internal sealed class TransientInstant
         for (var b = 0; b < _states.Length; b++)
         {
             var flux = BranchFlux(b, z);
-            _mmf[b] = _states[b].StaticMmf(flux, out var slope) + _states[b].StopMmf(flux, out var dStop);
-            slope += dStop;
+            _mmf[b] = _states[b].StaticMmf(flux, out var slope);
             if (weight > 0)
             {
                 _mmf[b] += _states[b].RateMmf((weight * flux) + BranchFlux(b, history), out var dRate);
@@ -135,7 +134,7 @@ internal sealed class TransientInstant
                 _residual[i] += c * _mmf[b];
                 for (var j = 0; c != 0 && j < _m; j++)
                 {
-                    _jacobian[i, j] += c * slope * _topology.Loops[b, j];
+                    _jacobian[(i * Size) + j] += c * slope * _topology.Loops[b, j];
                 }
             }
         }
@@ -157,24 +156,24 @@ internal sealed class TransientInstant
         {
             var turns = _topology.Linkages[k, i];
             _residual[i] -= turns * z[row];
-            _jacobian[i, row] = -turns;
+            _jacobian[(i * Size) + row] = -turns;
             _residual[row] += turns * (imposed ? z[i] : (weight * z[i]) + history[i]);
-            _jacobian[row, i] = imposed ? turns : turns * weight;
+            _jacobian[(row * Size) + i] = imposed ? turns : turns * weight;
         }
 
         for (var j = 0; !imposed && j < _k; j++)
         {
             var r = j != k ? 0 : weight > 0 ? _resistance[k] : 1;
             _residual[row] += (_inductance[k, j] * ((weight * z[_m + j]) + history[_m + j])) + (r * z[_m + j]);
-            _jacobian[row, _m + j] += (_inductance[k, j] * weight) + r;
+            _jacobian[(row * Size) + _m + j] += (_inductance[k, j] * weight) + r;
         }
 
         if (_star && _circuit.Windings[k].Phase != WindingPhase.Closed)
         {
             _residual[row] -= z[_m + _k];
-            _jacobian[row, _m + _k] = -1;
+            _jacobian[(row * Size) + _m + _k] = -1;
             _residual[_m + _k] += z[row];
-            _jacobian[_m + _k, row] = 1;
+            _jacobian[((_m + _k) * Size) + row] = 1;
         }
     }
 }
