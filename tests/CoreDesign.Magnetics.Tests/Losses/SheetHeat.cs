@@ -8,7 +8,7 @@ internal sealed record SheetHeat(double Hysteresis_W_per_m3, double Classical_W_
 {
     public static SheetHeat Of(SheetLaw law, double[] fluxDensity_T, double[] rate_T_per_s, double frequency_Hz)
     {
-        var wave = new SteelWave(law, fluxDensity_T, rate_T_per_s, frequency_Hz);
+        var wave = SteelWave.Of(law, fluxDensity_T, rate_T_per_s, 1, fluxDensity_T.Length, frequency_Hz);
         return new(wave.Hysteresis_W_per_m3, wave.Classical_W_per_m3, wave.Excess_W_per_m3);
     }
 }
