@@ -70,7 +70,7 @@ internal sealed class LoopMemory(StopCurve stops)
         if (_count == 0)
         {
             // Along the first curve: heat grows away from zero only.
-            heat += Math.Max(0, stops.Heat(Math.Abs(b)) - stops.Heat(Math.Abs(at)));
+            heat += stops.Heat(Math.Abs(b)) - stops.Heat(Math.Abs(at));
             _lastH = Math.CopySign(1, b) * stops.Field(Math.Abs(b), out _);
         }
         else
