@@ -63,7 +63,7 @@ public static class Places
         new("import-good", "/steels/import") { Enter = v => PasteAsync(v, Records.Certificate("Good certificate"), "Good certificate, as it would be kept") },
         new("import-warned", "/steels/import") { Enter = v => PasteAsync(v, Records.Certificate("Certificate without density").Replace("density_kg_m3,7650\n", "", StringComparison.Ordinal), "Worth a look") },
         new("import-errors", "/steels/import") { Enter = v => PasteAsync(v, Records.BrokenCertificate, "270") },
-        .. Chapters("order", "steels", "geometry", "joints", "solver", "building-factor", "sheet", "files", "circuits", "api", "cautions"),
+        .. Chapters("order", "steels", "geometry", "joints", "solver", "building-factor", "sheet", "files", "circuits", "api", "cautions", "published"),
         new("handbook-missing", "/handbook/no-such-chapter"),
         new("not-found", "/no/such/page") { Expected = Missing },
         new("error", "/error"),

@@ -5,8 +5,8 @@ namespace CoreDesign.Tests.Shared;
 
 /// <summary>
 /// A table of the handbook that a test computes. The test fails where the committed table says something else, and shows the lines as they should be;
-/// with COREDESIGN_REWRITE=1 in the environment it writes them into the chapter instead. A figure may be off by one in its last printed place, so that
-/// rounding alone turns no test red.
+/// with COREDESIGN_REWRITE=1 in the environment it writes them into the chapter instead. A figure with decimals may be off by one in its last place, so
+/// that rounding alone turns hardly a test red.
 /// </summary>
 internal static partial class HandbookTable
 {
