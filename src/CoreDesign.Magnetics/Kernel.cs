@@ -3,5 +3,5 @@ namespace CoreDesign.Magnetics;
 /// <summary>Version of the kernel's figures; raised whenever any result changes beyond rounding.</summary>
 public static class Kernel
 {
-    public const string Version = "1.0.0";
+    public const string Version = "1.1.0";
 }

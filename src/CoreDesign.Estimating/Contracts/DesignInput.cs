@@ -11,6 +11,9 @@ public sealed record DesignInput
 {
     public OrderInput? Order { get; init; }
     public ExcitedWindingInput? ExcitedWinding { get; init; }
+    public OtherWindingInput? OtherWinding { get; init; }
+    public TertiaryInput? Tertiary { get; init; }
+    public CapacitanceInput? Capacitance { get; init; }
     public SteelInput? Steel { get; init; }
     public CoreInput? Core { get; init; }
     public JointInput? Joint { get; init; }
@@ -39,8 +42,51 @@ public sealed record ExcitedWindingInput
     public string? Connection { get; init; }
     public double? LineVoltage_V { get; init; }
     public double? Turns { get; init; }
+
+    /// <summary>Turns in circuit are <see cref="Turns"/> times 1 plus this.</summary>
+    [JsonPropertyName("tap_percent")]
+    public double? Tap_percent { get; init; }
     [JsonPropertyName("resistance_ohm")]
     public double? Resistance_ohm { get; init; }
+}
+
+/// <summary>
+/// A winding from which the test could be energised instead; the answer then has the currents of either side at equal volts per turn.
+/// </summary>
+public sealed record OtherWindingInput
+{
+    /// <summary><c>single</c>, <c>YN</c>, <c>Y</c> or <c>D</c>.</summary>
+    public string? Connection { get; init; }
+    public double? LineVoltage_V { get; init; }
+
+    /// <summary>Left open, they follow from the voltages and connections.</summary>
+    public double? Turns { get; init; }
+    [JsonPropertyName("tap_percent")]
+    public double? Tap_percent { get; init; }
+}
+
+/// <summary>A delta closed on itself round the three phases; present, even empty, it is there.</summary>
+public sealed record TertiaryInput
+{
+    /// <summary><c>D</c>, the only one there is.</summary>
+    public string? Connection { get; init; }
+
+    /// <summary>Of one phase; left open, those of the excited winding.</summary>
+    public double? Turns { get; init; }
+    [JsonPropertyName("resistance_ohm")]
+    public double? Resistance_ohm { get; init; }
+}
+
+/// <summary>Capacitance of a high-voltage winding with earthed neutral whose voltage rises evenly from the neutral to the line.</summary>
+public sealed record CapacitanceInput
+{
+    /// <summary>Of one phase to earth.</summary>
+    [JsonPropertyName("phase_nF")]
+    public double? Phase_nF { get; init; }
+
+    /// <summary>Rated line voltage of that winding.</summary>
+    [JsonPropertyName("lineVoltage_kV")]
+    public double? LineVoltage_kV { get; init; }
 }
 
 /// <summary>A grade of the library, or data of one's own.</summary>
@@ -90,13 +136,20 @@ public sealed record LossPointInput
 /// <summary>The stacked core: form, limb section, yoke, window.</summary>
 public sealed record CoreInput
 {
-    /// <summary><c>singlePhaseTwoLimb</c> or <c>threeLimb</c>.</summary>
+    /// <summary><c>singlePhaseTwoLimb</c>, <c>singlePhaseThreeLimb</c>, <c>singlePhaseFourLimb</c>, <c>threeLimb</c> or <c>fiveLimb</c>.</summary>
     public string? Form { get; init; }
+
+    /// <summary>1, or 3 single-phase cores as a three-phase bank.</summary>
+    public int? Units { get; init; }
+
+    /// <summary>Limbs of a two-limb core that carry the winding: 1, or 2 with half of the turns on each.</summary>
+    public int? WoundLimbs { get; init; }
 
     /// <summary>The step set from the widest outward; or leave it out and give <see cref="Limb"/>.</summary>
     public IReadOnlyList<StepInput>? LimbSteps { get; init; }
     public LimbInput? Limb { get; init; }
     public YokeInput? Yoke { get; init; }
+    public ReturnLimbInput? ReturnLimb { get; init; }
 
     [JsonPropertyName("windowHeight_mm")]
     public double? WindowHeight_mm { get; init; }
@@ -105,6 +158,10 @@ public sealed record CoreInput
     [JsonPropertyName("windowWidth_mm")]
     public double? WindowWidth_mm { get; init; }
     public double? LimbPitch_mm { get; init; }
+
+    /// <summary>Clear width at the widest step between a wound and a return limb of a core that also has windows between wound limbs.</summary>
+    [JsonPropertyName("returnWindowWidth_mm")]
+    public double? ReturnWindowWidth_mm { get; init; }
     public double? StackingFactor { get; init; }
 }
 
@@ -138,6 +195,12 @@ public sealed record YokeInput
     public IReadOnlyList<double>? StepWidths_mm { get; init; }
 }
 
+public sealed record ReturnLimbInput
+{
+    /// <summary>Plates of a return limb are narrower by this factor than the wound limb's of the same step; the stacks are the same.</summary>
+    public double? AreaFactor { get; init; }
+}
+
 public sealed record JointInput
 {
     /// <summary><c>buttLap</c>, <c>mitredOverlap</c> or <c>stepLap</c>.</summary>
@@ -164,6 +227,10 @@ public sealed record JointInput
 public sealed record ModelInput
 {
     public double? BuildingFactor { get; init; }
+
+    /// <summary>Zero-sequence magnetizing reactance through air and tank over rated impedance.</summary>
+    [JsonPropertyName("zeroSequenceReactance_pu")]
+    public double? ZeroSequenceReactance_pu { get; init; }
     [JsonPropertyName("temperature_C")]
     public double? Temperature_C { get; init; }
 }

@@ -16,6 +16,18 @@ public sealed record EstimateResult
     public required double ExcitingPower_VA { get; init; }
     public required double PowerFactor { get; init; }
     public required IReadOnlyList<LineResult> Lines { get; init; }
+
+    /// <summary>The excited winding and, where it was given, the other one.</summary>
+    public IReadOnlyList<SideResult> Sides { get; init; } = [];
+
+    /// <summary>Null without a closed delta.</summary>
+    public TertiaryResult? Tertiary { get; init; }
+
+    /// <summary>Null unless the star point is isolated.</summary>
+    public NeutralResult? Neutral { get; init; }
+
+    /// <summary>Null where no capacitance was given; its current is in the lines.</summary>
+    public CapacitiveResult? Capacitive { get; init; }
     public required IReadOnlyList<LimbResult> Limbs { get; init; }
     public required IReadOnlyList<PartResult> Parts { get; init; }
     public required IReadOnlyList<ShareResult> Shares { get; init; }
@@ -54,10 +66,12 @@ public sealed record HarmonicResult(
     double Rms_A,
     [property: JsonPropertyName("phase_deg")] double Phase_deg);
 
-/// <summary>Flux density and field strength in one limb over one period.</summary>
+/// <summary>Flux density and field strength in one limb over one period; of a bank, the limbs of the unit in phase A.</summary>
 public sealed record LimbResult
 {
     public required string Name { get; init; }
+
+    /// <summary>L for a single phase; empty for a return limb of three phases.</summary>
     public required string Phase { get; init; }
     public required IReadOnlyList<double> FluxDensity_T { get; init; }
     [JsonPropertyName("fieldStrength_A_m")]
@@ -65,7 +79,7 @@ public sealed record LimbResult
 }
 
 /// <summary>
-/// A part of the core, or several equal ones. Area, length and mass are of one; loss, exciting power of all <see cref="Count"/>.
+/// A part of the core, or several equal ones (those of a bank's units). Area, length and mass are of one; loss, exciting power of all <see cref="Count"/>.
 /// </summary>
 public sealed record PartResult
 {
@@ -88,7 +102,7 @@ public sealed record PartResult
 /// <summary>A share of loss and current by part and cause; the shares of each add to 100 %.</summary>
 public sealed record ShareResult
 {
-    /// <summary><c>limbSteel</c>, <c>yokeSteel</c>, <c>cornerSteel</c>, <c>joints</c>, <c>zoneExtra</c>.</summary>
+    /// <summary><c>limbSteel</c>, <c>yokeSteel</c>, <c>cornerSteel</c>, <c>joints</c>, <c>zoneExtra</c>, <c>airPath</c>.</summary>
     public required string Cause { get; init; }
     public required string Label { get; init; }
     public required double Loss_W { get; init; }
@@ -96,6 +110,7 @@ public sealed record ShareResult
     public required double Current_percent { get; init; }
 }
 
+/// <summary>Of the whole core, of all units for a bank.</summary>
 public sealed record MassResult(double Limbs, double Yokes, double Corners, double Total);
 
 public sealed record MarginResult
@@ -117,6 +132,12 @@ public sealed record EnergyBalanceResult(double Terminal_W, double Material_W, d
 public sealed record GeometryResult
 {
     public required string Form { get; init; }
+
+    /// <summary>3 for a bank; all that follows is of one unit.</summary>
+    public int Units { get; init; } = 1;
+
+    /// <summary>From the left; empty in results kept from before there were return limbs.</summary>
+    public IReadOnlyList<CoreLimbResult> Limbs { get; init; } = [];
     public required IReadOnlyList<StepResult> LimbSteps { get; init; }
 
     /// <summary>Circle around the limb section.</summary>
@@ -137,6 +158,12 @@ public sealed record GeometryResult
     public required double WindowHeight_mm { get; init; }
     [JsonPropertyName("windowWidth_mm")]
     public required double WindowWidth_mm { get; init; }
+
+    /// <summary>Clear width between a wound and a return limb at the widest step; null where all windows are alike.</summary>
+    [JsonPropertyName("returnWindowWidth_mm")]
+    public double? ReturnWindowWidth_mm { get; init; }
+
+    /// <summary>Distance of neighbouring limb axes beside a window of <see cref="WindowWidth_mm"/>.</summary>
     [JsonPropertyName("limbPitch_mm")]
     public required double LimbPitch_mm { get; init; }
     [JsonPropertyName("limbWidth_mm")]
@@ -148,6 +175,23 @@ public sealed record GeometryResult
     [JsonPropertyName("overallHeight_mm")]
     public required double OverallHeight_mm { get; init; }
     public required IReadOnlyList<PlateResult> Plates { get; init; }
+}
+
+/// <summary>A limb in the row: where its axis lies from the first limb's, its widest plate, and whether it carries a winding or only returns flux.</summary>
+public sealed record CoreLimbResult
+{
+    public required string Name { get; init; }
+    [JsonPropertyName("axis_mm")]
+    public required double Axis_mm { get; init; }
+    [JsonPropertyName("width_mm")]
+    public required double Width_mm { get; init; }
+
+    /// <summary>Plate width of each step over the wound limb's.</summary>
+    public required double WidthShare { get; init; }
+    [JsonPropertyName("netArea_mm2")]
+    public required double NetArea_mm2 { get; init; }
+    public required bool Wound { get; init; }
+    public required bool IsReturn { get; init; }
 }
 
 /// <summary>One step of the limb and of the yoke; sheets counted over both sides of the axis.</summary>

@@ -23,11 +23,12 @@ internal sealed class CoreAtWork
         }
 
         ZeroSequenceReluctance_A_per_Wb = ZeroSequence(design);
-        _core = CoreCircuit.Build(
+        var core = CoreCircuit.Build(
             design.Geometry,
             Sheet.Sheet.Law,
             new JointBranch(Joint?.Curve?.Drop, design.EffectiveGap_m ?? 0),
             ZeroSequenceReluctance_A_per_Wb);
+        _core = design.Units == 3 ? core.AsBank() : core;
     }
 
     public ResolvedDesign Design { get; }
@@ -41,22 +42,26 @@ internal sealed class CoreAtWork
 
     /// <summary>Steady state at a voltage in per cent of rated.</summary>
     /// <exception cref="NotConvergedException">No steady state.</exception>
-    public CoreSolution SolveAt(double voltage_percent, CancellationToken cancel)
+    public CoreSolution SolveAt(double voltage_percent, CancellationToken cancel) => Solve(Design.Excited, voltage_percent, cancel);
+
+    /// <summary>Steady state with a winding fed, at a voltage in per cent of its own.</summary>
+    /// <exception cref="NotConvergedException">No steady state.</exception>
+    public CoreSolution Solve(FedWinding winding, double voltage_percent, CancellationToken cancel)
     {
-        var supply = Design.Supply with { Voltage_V = Design.Supply.Voltage_V * voltage_percent / 100 };
+        var supply = winding.Supply with { Voltage_V = winding.Supply.Voltage_V * voltage_percent / 100 };
         return CoreSolver.Solve(
             _core,
-            new CoreExcitation(supply, Design.Turns, Design.Resistance_ohm, ZeroSequenceReluctance_A_per_Wb),
+            new CoreExcitation(supply, winding.Turns, winding.Resistance_ohm, Design.Tertiary) { WoundLimbs = Design.WoundLimbs },
             Design.BuildingFactor.Value,
             new SolverOptions(PointsPerPeriod),
             cancel);
     }
 
-    /// <summary>The air path that gives the default zero-sequence reactance: X0 = w N²/(3 R) of rated impedance.</summary>
+    /// <summary>The air path that gives the zero-sequence reactance: X0 = w N²/(3 R) of rated impedance.</summary>
     private static double ZeroSequence(ResolvedDesign design)
     {
         var rated = design.Supply.Voltage_V * design.Supply.Voltage_V / design.RatedPower_VA;
-        var reactance = DesignDefaults.ZeroSequenceReactance_pu * rated;
+        var reactance = design.ZeroSequenceReactance_pu * rated;
         return 2 * Math.PI * design.Supply.Frequency_Hz * design.Turns * design.Turns / (3 * reactance);
     }
 }

@@ -7,20 +7,30 @@ using CoreDesign.Magnetics.Joints;
 
 namespace CoreDesign.Estimating.Estimate;
 
-/// <summary>Reads limb section, yoke and window of a design and builds the core.</summary>
+/// <summary>Reads yoke, return limbs and window of a design and builds the core.</summary>
 internal sealed class CoreReader(DesignResolver resolver)
 {
     private const double LowFill = 0.6;
 
     public (CoreGeometry? Geometry, CoreInput Filled) Read(CoreInput core, CoreForm? form, SteelGrade? steel, JointKind joint)
     {
+        var layout = Layout(core, form);
         var stacking = StackingFactor(core, steel);
         var height = resolver.Needed("core.windowHeight_mm", core.WindowHeight_mm);
-        var section = Section(core);
-        var window = WindowWidth(core, section);
-        var steps = section is null ? null : WithYokes(core.Yoke, section);
-        var filled = core with { StackingFactor = stacking, Yoke = core.Yoke ?? new YokeInput { AreaFactor = DesignDefaults.YokeAreaFactor } };
-        if (section is null || steps is null || form is null || double.IsNaN(stacking + height + window))
+        var section = new SectionReader(resolver).Read(core);
+        var besides = section is null ? double.NaN : section.Steps[0].Width_m * 1000 * (layout?.PitchShare ?? 1);
+        var window = WindowWidth(core, section is null ? null : besides);
+        var returnWindow = ReturnWindow(core, form, window);
+        var defaultYoke = form is { } known ? CoreForms.YokeAreaFactor(known) : DesignDefaults.YokeAreaFactor;
+        var steps = section is null ? null : WithYokes(core.Yoke, section, defaultYoke);
+        var filled = core with
+        {
+            StackingFactor = stacking,
+            Yoke = core.Yoke ?? new YokeInput { AreaFactor = defaultYoke },
+            ReturnLimb = layout?.Limbs.FirstOrDefault(l => l.IsReturn) is { } place ? new ReturnLimbInput { AreaFactor = place.WidthShare } : core.ReturnLimb,
+            ReturnWindowWidth_mm = returnWindow,
+        };
+        if (section is null || steps is null || form is null || layout is null || double.IsNaN(stacking + height + window) || returnWindow is double.NaN)
         {
             return (null, filled);
         }
@@ -40,10 +50,10 @@ internal sealed class CoreReader(DesignResolver resolver)
             resolver.Derive("core.limbPitch_mm");
         }
 
-        filled = filled with { WindowWidth_mm = window, LimbPitch_mm = window + (section.Steps[0].Width_m * 1000) };
+        filled = filled with { WindowWidth_mm = window, LimbPitch_mm = window + besides };
         try
         {
-            var geometry = CoreBuilder.Build(form.Value, steps, stacking, height / 1000, window / 1000, joint);
+            var geometry = CoreBuilder.Build(layout, steps, stacking, height / 1000, window / 1000, joint, returnWindow / 1000);
             if (section.FillRatio < LowFill)
             {
                 resolver.Warn("core.fill", string.Create(CultureInfo.InvariantCulture, $"The steps fill only {100 * section.FillRatio:0.0} % of their circle."));
@@ -53,8 +63,50 @@ internal sealed class CoreReader(DesignResolver resolver)
         }
         catch (GeometryException e)
         {
-            resolver.Say(PathOf(e.PropertyName, core), Words(e));
+            resolver.Say(KernelPaths.Of(e.PropertyName, core), KernelPaths.Words(e));
             return (null, filled);
+        }
+    }
+
+    private CoreLayout? Layout(CoreInput core, CoreForm? form)
+    {
+        if (form is not { } f)
+        {
+            return null;
+        }
+
+        if (!CoreForms.HasReturnLimbs(f))
+        {
+            Only("core.returnLimb", core.ReturnLimb, core.Form!, "no return limbs");
+            return CoreLayout.Of(f);
+        }
+
+        var share = resolver.Optional("core.returnLimb.areaFactor", core.ReturnLimb?.AreaFactor, DesignDefaults.ReturnLimbAreaFactor);
+        return double.IsNaN(share) ? null : CoreLayout.Of(f, share);
+    }
+
+    /// <summary>Null where the form has no such window; NaN after an error.</summary>
+    private double? ReturnWindow(CoreInput core, CoreForm? form, double window)
+    {
+        if (form is not { } f || !CoreForms.HasReturnWindows(f))
+        {
+            if (form is not null)
+            {
+                Only("core.returnWindowWidth_mm", core.ReturnWindowWidth_mm, core.Form!, "no windows beside a return limb other than those of windowWidth_mm");
+            }
+
+            return null;
+        }
+
+        // A window between wound limbs holds two windings, one beside a return limb holds one.
+        return resolver.Optional("core.returnWindowWidth_mm", core.ReturnWindowWidth_mm, window / 2);
+    }
+
+    private void Only(string path, object? given, string form, string has)
+    {
+        if (given is not null)
+        {
+            resolver.Say(path, $"The core form {form} has {has}. Leave this out, or choose another form.");
         }
     }
 
@@ -69,109 +121,7 @@ internal sealed class CoreReader(DesignResolver resolver)
         return resolver.Needed("core.stackingFactor", core.StackingFactor);
     }
 
-    private StepSet? Section(CoreInput core)
-    {
-        try
-        {
-            if (core.LimbSteps is { Count: > 0 } typed)
-            {
-                if (core.Limb is not null)
-                {
-                    resolver.Say("core.limb", "Give limbSteps or limb, not both.");
-                    return null;
-                }
-
-                return Typed(typed);
-            }
-
-            if (core.Limb is not { } limb)
-            {
-                resolver.Say("core.limb", "The limb section is missing. Give limb with diameter_mm and steps or stockWidths_mm, or limbSteps.");
-                return null;
-            }
-
-            return FromCircle(limb);
-        }
-        catch (GeometryException e)
-        {
-            resolver.Say(PathOf(e.PropertyName, core), Words(e));
-            return null;
-        }
-    }
-
-    private StepSet? Typed(IReadOnlyList<StepInput> typed)
-    {
-        if (typed.Count > StepSet.MostSteps)
-        {
-            resolver.Say("core.limbSteps", $"{typed.Count} steps are given; at most {StepSet.MostSteps}. Give one line for each plate width.");
-            return null;
-        }
-
-        var steps = new List<LimbStep>();
-        for (var i = 0; i < typed.Count; i++)
-        {
-            var path = string.Create(CultureInfo.InvariantCulture, $"core.limbSteps[{i}]");
-            steps.Add(new LimbStep(
-                resolver.Needed(path + ".width_mm", typed[i].Width_mm) / 1000,
-                resolver.Needed(path + ".stack_mm", typed[i].Stack_mm) / 1000));
-        }
-
-        var before = resolver.Errors.Count;
-        for (var i = 1; i < typed.Count; i++)
-        {
-            if (typed[i].Width_mm >= typed[i - 1].Width_mm)
-            {
-                resolver.Say(
-                    string.Create(CultureInfo.InvariantCulture, $"core.limbSteps[{i}].width_mm"),
-                    string.Create(CultureInfo.InvariantCulture, $"Step width {typed[i].Width_mm} mm is not below {typed[i - 1].Width_mm} mm, the step before. Order the steps from the widest outward; join steps of one width."));
-            }
-        }
-
-        return resolver.Errors.Count > before || steps.Exists(s => double.IsNaN(s.Width_m + s.Stack_m)) ? null : StepSet.FromSteps(steps);
-    }
-
-    private StepSet? FromCircle(LimbInput limb)
-    {
-        var diameter = resolver.Needed("core.limb.diameter_mm", limb.Diameter_mm);
-        if (limb.StockWidths_mm?.Count > StepOptimizer.MostStockWidths)
-        {
-            resolver.Say("core.limb.stockWidths_mm", $"{limb.StockWidths_mm.Count} widths are given; at most {StepOptimizer.MostStockWidths}. Give the widths that the works slits.");
-            return null;
-        }
-
-        if (limb.StockWidths_mm is { Count: > 0 } stock)
-        {
-            var before = resolver.Errors.Count;
-            for (var i = 0; i < stock.Count; i++)
-            {
-                resolver.Needed(string.Create(CultureInfo.InvariantCulture, $"core.limb.stockWidths_mm[{i}]"), stock[i]);
-            }
-
-            if (limb.Steps is { } most)
-            {
-                resolver.Needed("core.limb.steps", most);
-            }
-
-            if (resolver.Errors.Count > before || double.IsNaN(diameter))
-            {
-                return null;
-            }
-
-            var fitting = StepOptimizer.Within(diameter / 1000, [.. stock.Select(w => w / 1000)]);
-            if (fitting.Count == 0)
-            {
-                resolver.Say("core.limb.stockWidths_mm", string.Create(CultureInfo.InvariantCulture, $"No stock width is narrower than the circle of {diameter} mm. Add narrower widths, or take a larger circle."));
-                return null;
-            }
-
-            return StepOptimizer.BestFromStock(diameter / 1000, fitting, limb.Steps);
-        }
-
-        var steps = resolver.Needed("core.limb.steps", limb.Steps);
-        return double.IsNaN(diameter + steps) ? null : StepOptimizer.Best(diameter / 1000, (int)steps);
-    }
-
-    private double WindowWidth(CoreInput core, StepSet? section)
+    private double WindowWidth(CoreInput core, double? besides_mm)
     {
         if (core.WindowWidth_mm is null && core.LimbPitch_mm is null)
         {
@@ -186,12 +136,12 @@ internal sealed class CoreReader(DesignResolver resolver)
         }
 
         var pitch = resolver.Needed("core.limbPitch_mm", typedPitch);
-        if (section is null || double.IsNaN(pitch))
+        if (besides_mm is not { } besides || double.IsNaN(pitch))
         {
             return double.NaN;
         }
 
-        var left = pitch - (section.Steps[0].Width_m * 1000);
+        var left = pitch - besides;
         if (core.WindowWidth_mm is null)
         {
             var least = FieldCatalog.Find("core.windowWidth_mm").Min;
@@ -212,7 +162,7 @@ internal sealed class CoreReader(DesignResolver resolver)
         return width;
     }
 
-    private IReadOnlyList<CoreStep>? WithYokes(YokeInput? yoke, StepSet section)
+    private IReadOnlyList<CoreStep>? WithYokes(YokeInput? yoke, StepSet section, double defaultFactor)
     {
         if (yoke?.StepWidths_mm is { Count: > 0 } own)
         {
@@ -237,7 +187,7 @@ internal sealed class CoreReader(DesignResolver resolver)
             return resolver.Errors.Count > before ? null : section.WithYokes([.. own.Select(w => w / 1000)]);
         }
 
-        var factor = resolver.Optional("core.yoke.areaFactor", yoke?.AreaFactor, DesignDefaults.YokeAreaFactor);
+        var factor = resolver.Optional("core.yoke.areaFactor", yoke?.AreaFactor, defaultFactor);
         return double.IsNaN(factor) ? null : section.WithYokes(factor);
     }
 
@@ -262,25 +212,4 @@ internal sealed class CoreReader(DesignResolver resolver)
 
         return resolver.Errors.Count == before;
     }
-
-    /// <summary>The kernel speaks of its own arguments in metres; here they get the field's path.</summary>
-    private static string PathOf(string property, CoreInput core)
-    {
-        var index = property.IndexOf('[', StringComparison.Ordinal) is var at && at >= 0 ? property[at..(property.IndexOf(']', at) + 1)] : "";
-        return property switch
-        {
-            _ when property.Contains("yoke", StringComparison.OrdinalIgnoreCase) => core.Yoke?.StepWidths_mm is null ? "core.yoke.areaFactor" : "core.yoke.stepWidths_mm" + index,
-            _ when property.StartsWith("stockWidths", StringComparison.Ordinal) => "core.limb.stockWidths_mm" + index,
-            _ when property.StartsWith("diameter", StringComparison.Ordinal) => "core.limb.diameter_mm",
-            _ when property.StartsWith("windowHeight", StringComparison.Ordinal) => "core.windowHeight_mm",
-            _ when property.StartsWith("windowWidth", StringComparison.Ordinal) => "core.windowWidth_mm",
-            _ when property.StartsWith("stackingFactor", StringComparison.Ordinal) => "core.stackingFactor",
-            _ when property.StartsWith("steps", StringComparison.Ordinal) && core.LimbSteps is not null =>
-                "core.limbSteps" + index + (property.Contains("stack", StringComparison.OrdinalIgnoreCase) ? ".stack_mm" : index.Length > 0 ? ".width_mm" : ""),
-            _ => core.LimbSteps is null ? "core.limb" : "core.limbSteps",
-        };
-    }
-
-    /// <summary>Last resort, for what the checks above let through: the kernel's message, which counts in metres.</summary>
-    private static string Words(GeometryException e) => "Lengths here in metres: " + e.Message;
 }

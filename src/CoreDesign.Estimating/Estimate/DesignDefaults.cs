@@ -18,6 +18,12 @@ public static class DesignDefaults
 
     public static int Positions(JointKind kind) => kind == JointKind.StepLap ? StepLapPositions : 2;
 
-    /// <summary>Zero-sequence magnetizing reactance over rated impedance of a three-limb core through air and tank: 0.4 to 1.5 is published; it counts only with an isolated star.</summary>
+    public const double ReturnLimbAreaFactor = 0.5;
+    public const int WoundLimbs = 2;
+
+    /// <summary>
+    /// Zero-sequence magnetizing reactance over rated impedance through air and tank: 0.4 to 1.5 is published for three-limb cores; the same
+    /// is taken for the air beside the return limbs of five (common practice, no source). It counts with an isolated star, and little otherwise.
+    /// </summary>
     public const double ZeroSequenceReactance_pu = 0.6;
 }

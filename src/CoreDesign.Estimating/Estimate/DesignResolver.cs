@@ -24,29 +24,35 @@ internal sealed class DesignResolver(DesignInput input, SteelCatalog steels)
         var order = input.Order ?? new();
         var winding = input.ExcitedWinding ?? new();
         var core = input.Core ?? new();
-        var form = Form(core.Form);
-        var connection = Connection(winding.Connection, form);
-        CheckPhases(order, form);
+        var phases = new PhaseReader(this);
+        var form = phases.Form(core.Form);
+        var units = phases.Units(core, order, form);
+        var woundLimbs = phases.WoundLimbs(core, form);
+        var connection = phases.Connection(winding.Connection, form, units);
+        phases.Check(order, core, form, units);
         var rated = Needed("order.ratedPower_kVA", order.RatedPower_kVA);
         var frequency = Needed("order.frequency_Hz", order.Frequency_Hz);
         var highest = Optional("order.highestVoltage_percent", order.HighestVoltage_percent, DesignDefaults.HighestVoltage_percent);
         Limit("order.askedNoLoadLoss_W", order.AskedNoLoadLoss_W);
         Limit("order.askedNoLoadCurrent_percent", order.AskedNoLoadCurrent_percent);
         CheckTexts(order);
-        var voltage = Needed("excitedWinding.lineVoltage_V", winding.LineVoltage_V);
-        var turns = Needed("excitedWinding.turns", winding.Turns);
-        var resistance = Optional("excitedWinding.resistance_ohm", winding.Resistance_ohm, 0);
+        var windings = new WindingReader(this);
+        var (excited, filledExcited) = windings.Excited(winding, connection, frequency);
+        var (other, filledOther) = windings.Other(input.OtherWinding, excited, winding.Turns);
+        var (tertiary, filledTertiary) = windings.Tertiary(input.Tertiary, connection, winding.Turns);
+        var (capacitance, filledCapacitance) = windings.Capacitance(input.Capacitance, order, connection);
         var steel = Steel();
         var (joint, effectiveGap, filledJoint) = new JointReader(this).Read(input.Joint);
         var (geometry, filledCore) = new CoreReader(this).Read(core, form, steel, joint?.Kind ?? JointKind.StepLap);
-        if (geometry is not null && joint is not null && JointFit.Check(joint, geometry.Steps[0]) is { } misfit)
+        if (geometry is not null && joint is not null && JointFit.Check(joint, geometry) is { } misfit)
         {
             Say("joint.overlap_mm", misfit);
         }
 
         var building = Building(form, joint?.Kind);
         var temperature = Optional("model.temperature_C", input.Model?.Temperature_C, DesignDefaults.Temperature_C);
-        if (_errors.Count > 0 || geometry is null || steel is null || joint is null || form is null || connection is null || building is null)
+        var zeroSequence = ZeroSequence(form);
+        if (_errors.Count > 0 || geometry is null || steel is null || joint is null || excited is null || building is null)
         {
             return null;
         }
@@ -55,12 +61,15 @@ internal sealed class DesignResolver(DesignInput input, SteelCatalog steels)
         {
             Inputs = new DesignInput
             {
-                Order = order with { Phases = connection == SupplyConnection.Single ? 1 : 3, HighestVoltage_percent = highest },
-                ExcitedWinding = winding with { Connection = NameOf(connection.Value), Resistance_ohm = resistance },
+                Order = order with { Phases = excited.Supply.Connection == SupplyConnection.Single ? 1 : 3, HighestVoltage_percent = highest },
+                ExcitedWinding = filledExcited,
+                OtherWinding = filledOther,
+                Tertiary = filledTertiary,
+                Capacitance = filledCapacitance,
                 Steel = input.Steel!.Data is null ? new SteelInput { Grade = steel.Name } : input.Steel,
-                Core = filledCore,
+                Core = filledCore with { Units = core.Units is null && units == 1 ? null : units, WoundLimbs = woundLimbs },
                 Joint = filledJoint,
-                Model = new ModelInput { BuildingFactor = building.Value, Temperature_C = temperature },
+                Model = (input.Model ?? new()) with { BuildingFactor = building.Value, Temperature_C = temperature, ZeroSequenceReactance_pu = zeroSequence },
             },
             Derived = _derived,
             Warnings = _warnings,
@@ -68,9 +77,13 @@ internal sealed class DesignResolver(DesignInput input, SteelCatalog steels)
             Geometry = geometry,
             Joint = joint,
             EffectiveGap_m = effectiveGap,
-            Supply = new Supply(connection.Value, voltage, frequency),
-            Turns = turns,
-            Resistance_ohm = resistance,
+            Excited = excited,
+            Other = other,
+            Tertiary = tertiary,
+            Capacitance = capacitance,
+            Units = units,
+            WoundLimbs = woundLimbs ?? 1,
+            ZeroSequenceReactance_pu = zeroSequence ?? DesignDefaults.ZeroSequenceReactance_pu,
             RatedPower_VA = rated * 1000,
             HighestVoltage_percent = highest,
             BuildingFactor = building,
@@ -146,71 +159,6 @@ internal sealed class DesignResolver(DesignInput input, SteelCatalog steels)
         }
     }
 
-    private CoreForm? Form(string? form)
-    {
-        switch (form)
-        {
-            case "threeLimb":
-                return CoreForm.ThreeLimb;
-            case "singlePhaseTwoLimb":
-                return CoreForm.SinglePhaseTwoLimb;
-            case null:
-                Say("core.form", "The core form is missing. Give threeLimb or singlePhaseTwoLimb.");
-                return null;
-            default:
-                Say("core.form", $"Core form '{Cut(form)}' is not known here. Give threeLimb or singlePhaseTwoLimb.");
-                return null;
-        }
-    }
-
-    private SupplyConnection? Connection(string? connection, CoreForm? form)
-    {
-        if (connection is null)
-        {
-            Derive("excitedWinding.connection");
-            return form == CoreForm.SinglePhaseTwoLimb ? SupplyConnection.Single : SupplyConnection.StarWithNeutral;
-        }
-
-        SupplyConnection? read = connection switch
-        {
-            "single" => SupplyConnection.Single,
-            "YN" => SupplyConnection.StarWithNeutral,
-            "Y" => SupplyConnection.StarIsolated,
-            "D" => SupplyConnection.Delta,
-            _ => null,
-        };
-        if (read is null)
-        {
-            Say("excitedWinding.connection", $"Connection '{Cut(connection)}' is not known. Give single, YN, Y or D.");
-        }
-        else if (form is { } f && (read == SupplyConnection.Single) != (f == CoreForm.SinglePhaseTwoLimb))
-        {
-            Say("excitedWinding.connection", f == CoreForm.ThreeLimb
-                ? "Connection 'single' does not fit a three-limb core. Give YN, Y or D."
-                : $"Connection '{connection}' does not fit a single-phase core. Give single.");
-        }
-
-        return read;
-    }
-
-    private void CheckPhases(OrderInput order, CoreForm? form)
-    {
-        if (order.Phases is not { } phases)
-        {
-            Derive("order.phases");
-            return;
-        }
-
-        if (phases is not (1 or 3))
-        {
-            Say("order.phases", string.Create(CultureInfo.InvariantCulture, $"Phases {phases} is neither 1 nor 3. Give 1 or 3."));
-        }
-        else if (form is { } f && (phases == 1) != (f == CoreForm.SinglePhaseTwoLimb))
-        {
-            Say("order.phases", string.Create(CultureInfo.InvariantCulture, $"Phases {phases} does not fit the core form {input.Core!.Form}. Change one of the two."));
-        }
-    }
-
     private SteelGrade? Steel()
     {
         var steel = input.Steel;
@@ -243,6 +191,23 @@ internal sealed class DesignResolver(DesignInput input, SteelCatalog steels)
         return null;
     }
 
+    /// <summary>Null where the form has no such path.</summary>
+    private double? ZeroSequence(CoreForm? form)
+    {
+        var given = input.Model?.ZeroSequenceReactance_pu;
+        if (form is { } f && !CoreForms.HasAirPath(f))
+        {
+            if (given is not null)
+            {
+                Say("model.zeroSequenceReactance_pu", $"The zero-sequence path counts for three phases on one core, not for {input.Core!.Form}. Leave it out.");
+            }
+
+            return null;
+        }
+
+        return Optional("model.zeroSequenceReactance_pu", given, DesignDefaults.ZeroSequenceReactance_pu);
+    }
+
     private BuildingFactorValue? Building(CoreForm? form, JointKind? joint)
     {
         if (input.Model?.BuildingFactor is { } given)
@@ -254,13 +219,5 @@ internal sealed class DesignResolver(DesignInput input, SteelCatalog steels)
         return form is { } f && joint is { } j ? BuildingFactors.Default(f, j) : null;
     }
 
-    private static string NameOf(SupplyConnection connection) => connection switch
-    {
-        SupplyConnection.Single => "single",
-        SupplyConnection.StarWithNeutral => "YN",
-        SupplyConnection.StarIsolated => "Y",
-        _ => "D",
-    };
-
-    private static string Cut(string text) => text.Length <= 40 ? text : text[..40] + "…";
+    internal static string Cut(string text) => text.Length <= 40 ? text : text[..40] + "…";
 }

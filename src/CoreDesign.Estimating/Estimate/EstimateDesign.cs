@@ -57,8 +57,7 @@ public static class EstimateDesign
     /// <summary>What the voltage demands of the limbs, B = U/(sqrt2 pi f N A), where it is beyond any law; else null.</summary>
     private static string? FarAboveSaturation(ResolvedDesign design)
     {
-        var phase = design.Supply.Connection is SupplyConnection.StarWithNeutral or SupplyConnection.StarIsolated ? design.Supply.Voltage_V / Math.Sqrt(3) : design.Supply.Voltage_V;
-        var B = phase / (Math.Sqrt(2) * Math.PI * design.Supply.Frequency_Hz * design.Turns * design.Geometry.NetLimbArea_m2);
+        var B = design.Excited.PhaseVoltage_V / (Math.Sqrt(2) * Math.PI * design.Supply.Frequency_Hz * design.Turns * design.Geometry.NetLimbArea_m2);
         return B <= Highest_T ? null : string.Create(
             CultureInfo.InvariantCulture,
             $"The limbs would have to carry {B:0.0#} T; the steel saturates at {design.Steel.SaturationPolarization_T.Value} T, and no figure is given beyond {Highest_T} T. Take more turns, a larger limb or a lower voltage.");

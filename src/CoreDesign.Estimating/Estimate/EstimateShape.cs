@@ -4,14 +4,13 @@ using CoreDesign.Magnetics;
 using CoreDesign.Magnetics.Circuits;
 using CoreDesign.Magnetics.Cores;
 using CoreDesign.Magnetics.Excitation;
+using CoreDesign.Magnetics.Geometry;
 
 namespace CoreDesign.Estimating.Estimate;
 
 /// <summary>Turns the steady state of a core into the figures of an estimate.</summary>
 internal static class EstimateShape
 {
-    private const int HighestHarmonic = 13;
-
     public const string MarginDefinition =
         "Saturation polarization at core temperature less the highest peak flux density of any part, over saturation polarization; per cent.";
 
@@ -21,10 +20,11 @@ internal static class EstimateShape
         var atRated = core.SolveAt(100, cancel);
         var atHighest = core.SolveAt(design.HighestVoltage_percent, cancel);
         var solution = atRated.Solution;
-        var lines = LineCurrents.Of(solution);
+        var lines = CoreLines.Of(design, atRated, design.Excited);
         var current = lines.Average(l => Waveform.Rms(l.Current_A));
         var apparent = (design.Phases == 3 ? Math.Sqrt(3) : 1) * design.Supply.Voltage_V * current;
-        var peakFlux = solution.PeakFluxDensity_T(atRated.Core.Parts[0].Branches[0]);
+        var wound = "limb" + design.Geometry.Limbs.First(l => !l.IsReturn).Letter;
+        var peakFlux = solution.PeakFluxDensity_T(atRated.Core.Parts.First(p => p.Part == wound).Branches[0]);
         return new EstimateResult
         {
             NoLoadLoss_W = solution.CoreLoss_W,
@@ -34,7 +34,11 @@ internal static class EstimateShape
             ExcitingPower_VA = apparent,
             PowerFactor = solution.TerminalPower_W / apparent,
             Lines = [.. lines.Select(Line)],
-            Limbs = [.. atRated.Core.Limbs.Select((letter, i) => Limb(atRated, letter, design.Phases == 1 ? "L" : letter))],
+            Sides = SideShape.Of(core, atRated, cancel),
+            Tertiary = SideShape.Tertiary(design, solution),
+            Neutral = SideShape.Neutral(design, solution),
+            Capacitive = SideShape.Capacitive(design),
+            Limbs = [.. design.Geometry.Limbs.Select(l => Limb(atRated, l.Letter, PhaseOf(design, l)))],
             Parts = PartShape.Of(atRated, design.Steel.Density_kg_per_m3.Value),
             Shares = ShareShape.Of(atRated),
             Mass_kg = GeometryShape.Mass(design),
@@ -64,9 +68,12 @@ internal static class EstimateShape
         Phase = line.Name,
         Rms_A = Waveform.Rms(line.Current_A),
         Peak_A = Waveform.Peak(line.Current_A),
-        Harmonics = [.. Waveform.Harmonics(line.Current_A, HighestHarmonic).Select(h => new HarmonicResult(h.Order, h.Amplitude / Math.Sqrt(2), h.Phase_deg))],
+        Harmonics = SideShape.Harmonics(line.Current_A),
         Waveform_A = line.Current_A,
     };
+
+    private static string PhaseOf(ResolvedDesign design, CoreLimb limb) =>
+        design.Phases == 1 ? "L" : design.Units == 3 ? "A" : limb.IsReturn ? "" : limb.Letter;
 
     private static LimbResult Limb(CoreSolution core, string letter, string phase)
     {

@@ -21,6 +21,11 @@ internal static class EstimateSources
         sources.Add(core.Joint is null
             ? new SourceResult("joint", "Joints: the works' effective gap across the limb section", FigureStanding.Works)
             : new SourceResult("joint", "Joints: sheet-by-sheet lattice, saw-tooth books, rotation stiffness 36 kJ/m³; current only, loss is in the building factor", FigureStanding.Derived));
+        if (core.Design.Capacitance is not null)
+        {
+            sources.Add(new SourceResult("capacitance", "Capacitive current: capacitance as entered, earthed neutral, voltage rising evenly along the winding, w (C/3) U² per phase, fundamental only", FigureStanding.Derived));
+        }
+
         if (core.Design.Temperature_C != 20)
         {
             sources.Add(new SourceResult("temperature", "No-load loss 0.065 % per kelvin (IEEE C57.12.90), saturation polarization 0.02 % per kelvin", FigureStanding.FromMemory));

@@ -1,6 +1,5 @@
 using System.Globalization;
 using CoreDesign.Estimating.Contracts;
-using CoreDesign.Magnetics.Circuits;
 using CoreDesign.Magnetics.Cores;
 
 namespace CoreDesign.Estimating.Estimate;
@@ -45,9 +44,9 @@ internal static class EstimateWarnings
             yield return new NoteResult("jointRange", Text($"Beyond {joint.LastFluxDensity_T:0.00} T the joint curve goes on straight."));
         }
 
-        if (core.Design.Supply.Connection == SupplyConnection.StarIsolated)
+        foreach (var note in ConnectionNotes.Of(core.Design, atRated))
         {
-            yield return new NoteResult("zeroSequence", Text($"Isolated star: the zero-sequence path through air and tank is taken as {DesignDefaults.ZeroSequenceReactance_pu} of rated impedance (0.4 to 1.5 is published for three-limb cores)."));
+            yield return note;
         }
 
         if (core.Joint is null)

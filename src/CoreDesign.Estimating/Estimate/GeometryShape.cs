@@ -13,6 +13,17 @@ internal static class GeometryShape
         return new GeometryResult
         {
             Form = design.Inputs.Core!.Form!,
+            Units = design.Units,
+            Limbs = [.. g.Limbs.Select((l, i) => new CoreLimbResult
+            {
+                Name = "limb" + l.Letter,
+                Axis_mm = Mm(l.Axis_m),
+                Width_mm = Mm(l.WidthShare * g.Steps[0].LimbWidth_m),
+                WidthShare = l.WidthShare,
+                NetArea_mm2 = l.NetArea_m2 * 1e6,
+                Wound = !l.IsReturn && (g.Form != CoreForm.SinglePhaseTwoLimb || i < design.WoundLimbs),
+                IsReturn = l.IsReturn,
+            })],
             LimbSteps = [.. g.Steps.Select(s => new StepResult
             {
                 Width_mm = Mm(s.LimbWidth_m),
@@ -28,6 +39,7 @@ internal static class GeometryShape
             StackHeight_mm = Mm(g.StackHeight_m),
             WindowHeight_mm = Mm(g.WindowHeight_m),
             WindowWidth_mm = Mm(g.WindowWidth_m),
+            ReturnWindowWidth_mm = CoreForms.HasReturnWindows(g.Form) ? Mm(g.ReturnWindowWidth_m) : null,
             LimbPitch_mm = Mm(g.LimbPitch_m),
             LimbWidth_mm = Mm(g.Steps[0].LimbWidth_m),
             YokeHeight_mm = Mm(g.Steps[0].YokeWidth_m),
@@ -41,7 +53,7 @@ internal static class GeometryShape
     public static MassResult Mass(ResolvedDesign design)
     {
         var density = design.Steel.Density_kg_per_m3.Value;
-        double Of(params CorePartKind[] kinds) => density * design.Geometry.Parts.Where(p => kinds.Contains(p.Kind)).Sum(p => p.Volume_m3);
+        double Of(params CorePartKind[] kinds) => design.Units * density * design.Geometry.Parts.Where(p => kinds.Contains(p.Kind)).Sum(p => p.Volume_m3);
         double limbs = Of(CorePartKind.Limb), yokes = Of(CorePartKind.Yoke), corners = Of(CorePartKind.Corner, CorePartKind.TZone);
         return new MassResult(limbs, yokes, corners, limbs + yokes + corners);
     }

@@ -11,10 +11,11 @@ internal static class JointFit
     /// The message for a book that spreads beyond the corner of the widest step, or null. A square joint moves along the yoke's height; a mitre moves normal
     /// to its line, in which direction a square corner measures sqrt(2) times its side (geometry). Narrower steps are not held against it.
     /// </summary>
-    public static string? Check(JointSpec joint, CoreStep widest)
+    public static string? Check(JointSpec joint, CoreGeometry core)
     {
         var spread = 1000 * (joint.Positions - 1) * joint.Shift_m;
-        var side = 1000 * Math.Min(widest.LimbWidth_m, widest.YokeWidth_m);
+        var widest = core.Steps[0];
+        var side = 1000 * Math.Min(widest.LimbWidth_m * core.Limbs.Min(l => l.WidthShare), widest.YokeWidth_m);
         var room = joint.Kind == JointKind.ButtLap ? side : Math.Sqrt(2) * side;
         return spread < room ? null : string.Create(
             CultureInfo.InvariantCulture,

@@ -75,7 +75,7 @@ public static class Levers
 
         if (core.Yoke?.StepWidths_mm is null)
         {
-            var factor = Math.Round((core.Yoke?.AreaFactor ?? DesignDefaults.YokeAreaFactor) + YokeFactor, 6);
+            var factor = Math.Round((core.Yoke?.AreaFactor ?? now.Inputs.Core?.Yoke?.AreaFactor ?? DesignDefaults.YokeAreaFactor) + YokeFactor, 6);
             yield return ("largerYoke", Text($"Yoke area factor {factor}"), design with { Core = core with { Yoke = new YokeInput { AreaFactor = factor } } });
         }
     }

@@ -34,7 +34,7 @@ internal static class PartShape
                 CorePartKind.TZone => "tZone",
                 _ => "joint",
             },
-            Count = 1,
+            Count = core.Core.Units,
             Area_mm2 = 1e6 * (steel?.NetArea_m2 ?? core.Core.Branches[branches[0]].Area_m2),
             Length_mm = 1000 * (steel?.Length_m ?? 0),
             Mass_kg = density_kg_m3 * (steel?.Volume_m3 ?? 0),

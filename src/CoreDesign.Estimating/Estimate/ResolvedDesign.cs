@@ -1,6 +1,7 @@
 using CoreDesign.Estimating.Contracts;
 using CoreDesign.Estimating.Steels;
 using CoreDesign.Magnetics.Circuits;
+using CoreDesign.Magnetics.Cores;
 using CoreDesign.Magnetics.Geometry;
 using CoreDesign.Magnetics.Joints;
 
@@ -16,15 +17,27 @@ internal sealed record ResolvedDesign
     public required CoreGeometry Geometry { get; init; }
     public required JointSpec Joint { get; init; }
     public required double? EffectiveGap_m { get; init; }
-    public required Supply Supply { get; init; }
-    public required double Turns { get; init; }
-    public required double Resistance_ohm { get; init; }
+    public required FedWinding Excited { get; init; }
+
+    /// <summary>The winding that the test could energise instead, at the voltage of the same volts per turn.</summary>
+    public required FedWinding? Other { get; init; }
+    public required ClosedDelta? Tertiary { get; init; }
+    public required WindingCapacitance? Capacitance { get; init; }
+
+    /// <summary>3 for a bank; geometry is of one.</summary>
+    public required int Units { get; init; }
+    public required int WoundLimbs { get; init; }
+    public required double ZeroSequenceReactance_pu { get; init; }
     public required double RatedPower_VA { get; init; }
     public required double HighestVoltage_percent { get; init; }
     public required BuildingFactorValue BuildingFactor { get; init; }
     public required double Temperature_C { get; init; }
 
+    public Supply Supply => Excited.Supply;
+
+    public double Turns => Excited.Turns;
+
     public int Phases => Supply.Connection == SupplyConnection.Single ? 1 : 3;
 
-    public double RatedCurrent_A => RatedPower_VA / ((Phases == 3 ? Math.Sqrt(3) : 1) * Supply.Voltage_V);
+    public double RatedCurrent_A => RatedPower_VA * Connections.CurrentPerVoltAmpere(Supply.Connection) / Supply.Voltage_V;
 }

@@ -9,6 +9,8 @@ namespace CoreDesign.Estimating.Estimate;
 /// <summary>Loss and current by part and cause, largest loss first.</summary>
 internal static class ShareShape
 {
+    private const double Rounding = 1e-9;
+
     public static IReadOnlyList<ShareResult> Of(CoreSolution core)
     {
         var s = core.Solution;
@@ -32,7 +34,13 @@ internal static class ShareShape
 
         shares.Add(("zoneExtra", "Joint and T zones, building factor", s.ExtraLoss_W.Sum(), extra.Sum()));
 
-        // Whatever is left belongs to the air path, which carries current only with an isolated star.
+        // The air path carries flux with an isolated star, or where other fluxes are free too.
+        var air = 1 - shares.Sum(x => x.Current);
+        if (Math.Abs(air) > Rounding)
+        {
+            shares.Add(("airPath", "Zero-sequence path through air", 0, air));
+        }
+
         return [.. shares
             .Select(x => new ShareResult
             {

@@ -21,7 +21,7 @@ public static class VoltageSweep
     {
         Voltage_percent = voltage_percent,
         NoLoadLoss_W = s.Solution.CoreLoss_W,
-        NoLoadCurrent_percent = 100 * LineCurrents.Of(s.Solution).Average(l => Waveform.Rms(l.Current_A)) / core.Design.RatedCurrent_A,
+        NoLoadCurrent_percent = 100 * CoreLines.Of(core.Design, s, core.Design.Excited).Average(l => Waveform.Rms(l.Current_A)) / core.Design.RatedCurrent_A,
         PeakFluxDensity_T = PartShape.Worst(s).Peak_T,
     };
 }

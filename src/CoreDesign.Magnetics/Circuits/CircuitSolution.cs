@@ -58,6 +58,10 @@ public sealed class CircuitSolution
         }
     }
 
+    internal SolverRun Run => _run;
+
+    internal PathWaves[] Paths => _paths;
+
     /// <summary>The circuit as it was prepared; <see cref="Supply"/> says at which voltage it was solved.</summary>
     public MagneticCircuit Circuit => _run.Circuit;
 

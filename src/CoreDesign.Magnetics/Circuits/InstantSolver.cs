@@ -66,7 +66,7 @@ internal sealed class InstantSolver
         var worst = double.PositiveInfinity;
         for (var iteration = 0; iteration < MaxIterations; iteration++)
         {
-            if (Size == 1)
+            if (Size == 1 && _f == 1)
             {
                 OneStep(z[0], t, perFlux, past);
             }

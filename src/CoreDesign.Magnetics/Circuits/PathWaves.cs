@@ -70,6 +70,27 @@ internal sealed class PathWaves
     /// <summary>Mean square of the rate; the heat of an extra-loss term of one A s/Wb, W.</summary>
     public double MeanSquareRate { get; private set; }
 
+    /// <summary>The waves of a like path in a copy of the circuit, read some points later.</summary>
+    public PathWaves Shifted(FluxPath path, int shift, int points, double extraLoss_A_s_per_Wb)
+    {
+        var copy = new PathWaves(path, Flux_Wb.Length) { Peak_Wb = Peak_Wb };
+        new SharedWave(Flux_Wb, shift, points).AddTo(copy.Flux_Wb, 1);
+        new SharedWave(Rate_Wb_per_s, shift, points).AddTo(copy.Rate_Wb_per_s, 1);
+        SharedWave Later(SharedWave x) => x with { Shift = (x.Shift + shift) % points };
+        for (var i = 0; i < Fields.Length; i++)
+        {
+            (copy.Fields[i], copy.Heat[i]) = (Later(Fields[i]), Heat[i]);
+        }
+
+        for (var i = 0; i < JointMmf.Length; i++)
+        {
+            copy.JointMmf[i] = Later(JointMmf[i]);
+        }
+
+        copy.SumUp(extraLoss_A_s_per_Wb);
+        return copy;
+    }
+
     /// <summary>The same waves with another extra-loss term; only its own MMF is new.</summary>
     public PathWaves With(double extraLoss_A_s_per_Wb)
     {

@@ -118,7 +118,7 @@ internal sealed class PeriodicSolver
             }
 
             change /= Math.Max(scale, double.Epsilon);
-            if (change < _run.Options.Tolerance && offset < _run.Options.Tolerance * scale)
+            if (change < _run.Options.Tolerance && offset <= _run.Options.Tolerance * scale)
             {
                 return;
             }

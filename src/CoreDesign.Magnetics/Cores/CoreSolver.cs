@@ -22,7 +22,22 @@ public static class CoreSolver
     public static CoreSolution Solve(CoreCircuit core, CoreExcitation excitation, double buildingFactor, SolverOptions options, CancellationToken cancel = default)
     {
         ArgumentNullException.ThrowIfNull(core);
+        ArgumentNullException.ThrowIfNull(excitation);
+        ArgumentNullException.ThrowIfNull(options);
         ArgumentOutOfRangeException.ThrowIfLessThan(buildingFactor, 1);
+        var settled = TertiaryShare.Settled(excitation);
+        if (options.UseSymmetry && BankSymmetry.Holds(core, settled, options.PointsPerPeriod))
+        {
+            var unit = Whole(core.Unit, BankSymmetry.OfUnit(settled), buildingFactor, options, cancel);
+            return new CoreSolution(core, BankSymmetry.Spread(core, settled, unit.Solution));
+        }
+
+        return Whole(core, settled, buildingFactor, options, cancel);
+    }
+
+    /// <summary>Every equation of the circuit as it stands, without the use of symmetry.</summary>
+    internal static CoreSolution Whole(CoreCircuit core, CoreExcitation excitation, double buildingFactor, SolverOptions options, CancellationToken cancel)
+    {
         var bare = CircuitSolver.Solve(core.With(excitation), options, cancel);
         if (buildingFactor == 1)
         {

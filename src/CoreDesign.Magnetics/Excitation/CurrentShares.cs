@@ -3,7 +3,7 @@ using CoreDesign.Magnetics.Circuits;
 namespace CoreDesign.Magnetics.Excitation;
 
 /// <summary>
-/// Splits the winding currents by cause. Currents follow linearly from the branches' MMFs, i = G(transposed)·F with G the flux per linkage, so the sum of squares
+/// Splits the currents of the supply's windings by cause. Currents follow linearly from the branches' MMFs, i = G(transposed)·F with G the flux per linkage, so the sum of squares
 /// of all currents is the sum over branches of F times the flux that linkages equal to the currents would give. Each term is that branch's share;
 /// shares add to one, and a share may be negative where a branch lowers the current.
 /// </summary>
@@ -15,7 +15,7 @@ public static class CurrentShares
     {
         ArgumentNullException.ThrowIfNull(solution);
         var g = solution.FluxPerLinkage ?? throw new InvalidOperationException("Shares need a circuit whose fluxes follow from the linkages.");
-        var windings = solution.WindingCurrent_A;
+        double[][] windings = [.. solution.WindingCurrent_A.Where((_, w) => solution.Circuit.Windings[w].Phase != WindingPhase.Closed)];
         var total = windings.Sum(w => w.Sum(i => i * i));
         var shares = new double[solution.Circuit.Branches.Count];
         for (var b = 0; total > 0 && b < shares.Length; b++)

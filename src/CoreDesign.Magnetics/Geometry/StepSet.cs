@@ -9,11 +9,11 @@ public sealed record StepSet(IReadOnlyList<LimbStep> Steps, double CircleDiamete
     /// <summary>Most steps that a limb can have.</summary>
     public const int MostSteps = GeometryChecks.MostSteps;
 
-    /// <summary>The steps with yoke plates wider than the limb's of the same step by <paramref name="yokeFactor"/> (0.5 to 3).</summary>
+    /// <summary>The steps with yoke plates wider than the limb's of the same step by <paramref name="yokeFactor"/> (0.3 to 3).</summary>
     /// <exception cref="GeometryException">Factor out of range.</exception>
     public IReadOnlyList<CoreStep> WithYokes(double yokeFactor)
     {
-        GeometryChecks.Range("yokeFactor", yokeFactor, 0.5, 3, "times the limb", "1 is a yoke equal to the limb; enlarged yokes have 1.05 to 1.25.");
+        GeometryChecks.Range("yokeFactor", yokeFactor, 0.3, 3, "times the limb", "1 is a yoke equal to the limb; enlarged yokes have 1.05 to 1.25.");
         return [.. Steps.Select(s => new CoreStep(s.Width_m, s.Width_m * yokeFactor, s.Stack_m))];
     }
 

@@ -26,6 +26,39 @@ internal static class Designs
         Joint = new() { Type = "mitredOverlap" },
     };
 
+    /// <summary>A design of every form, at 1.7 T: single-phase ones fed from one winding, three-phase ones with this connection, a bank of each single-phase form last.</summary>
+    public static DesignInput Of(string form, string connection = "YN", int units = 1, double b = 1.7)
+    {
+        var single = form.StartsWith("singlePhase", StringComparison.Ordinal) && units == 1;
+        return WithFluxDensity(
+            ThreeLimb with
+            {
+                ExcitedWinding = new() { Connection = single ? "single" : connection, LineVoltage_V = 400, Turns = 18 },
+                Core = ThreeLimb.Core! with { Form = form, Units = units == 1 ? null : units },
+            },
+            b);
+    }
+
+    /// <summary>Forms and connections that fit.</summary>
+    public static TheoryData<string, string, int> Every()
+    {
+        var all = new TheoryData<string, string, int>();
+        foreach (var form in new[] { "singlePhaseTwoLimb", "singlePhaseThreeLimb", "singlePhaseFourLimb" })
+        {
+            all.Add(form, "single", 1);
+        }
+
+        foreach (var connection in new[] { "YN", "Y", "D" })
+        {
+            all.Add("threeLimb", connection, 1);
+            all.Add("fiveLimb", connection, 1);
+            all.Add("singlePhaseTwoLimb", connection, 3);
+            all.Add("singlePhaseThreeLimb", connection, 3);
+        }
+
+        return all;
+    }
+
     /// <summary>Random designs; flux density 1.3 to 1.75 T by choice of the voltage.</summary>
     public static Gen<DesignInput> Random { get; } =
         from three in Gen.Bool

@@ -67,6 +67,41 @@ public class RefusalTests
         Assert.Empty(Errors(low with { Joint = new() { Type = "buttLap" } }));
     }
 
+    public static TheoryData<string, string> Misfits() => new()
+    {
+        { "core.units", "has three phases on one core" },
+        { "core.woundLimbs", "a choice of two-limb cores" },
+        { "core.returnLimb", "no return limbs" },
+        { "core.returnWindowWidth_mm", "no windows beside a return limb" },
+    };
+
+    [Theory]
+    [MemberData(nameof(Misfits))]
+    public void Field_of_another_core_form_is_refused_by_name(string path, string words)
+    {
+        var core = Designs.ThreeLimb.Core! with { Units = 3, WoundLimbs = 2, ReturnLimb = new(), ReturnWindowWidth_mm = 100 };
+        Assert.Contains(words, Errors(Designs.ThreeLimb with { Core = core })[path], StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void Windings_that_do_not_fit_the_phases_are_refused_by_name()
+    {
+        var errors = Errors(Designs.TwoLimb with
+        {
+            OtherWinding = new() { Connection = "YN", LineVoltage_V = 11_000 },
+            Tertiary = new(),
+            Capacitance = new() { Phase_nF = 5 },
+            Model = new() { ZeroSequenceReactance_pu = 0.6 },
+        });
+        Assert.Contains("Give single", errors["otherWinding.connection"], StringComparison.Ordinal);
+        Assert.Contains("three phases", errors["tertiary"], StringComparison.Ordinal);
+        Assert.Contains("rated voltages", errors["capacitance.lineVoltage_kV"], StringComparison.Ordinal);
+        Assert.Contains("Leave it out", errors["model.zeroSequenceReactance_pu"], StringComparison.Ordinal);
+        Assert.Contains("Give D", Errors(Designs.ThreeLimb with { Tertiary = new() { Connection = "Y" } })["tertiary.connection"], StringComparison.Ordinal);
+        Assert.Contains("neither 1 nor 3", Errors(Designs.TwoLimb with { Core = Designs.TwoLimb.Core! with { Units = 2 } })["core.units"], StringComparison.Ordinal);
+        Assert.Contains("bank of three units", Errors(Designs.TwoLimb with { Core = Designs.TwoLimb.Core! with { Units = 3 } })["excitedWinding.connection"], StringComparison.Ordinal);
+    }
+
     [Fact]
     public void Both_ways_to_say_one_thing_are_refused()
     {
@@ -112,6 +147,19 @@ public class RefusalTests
             "order.askedNoLoadCurrent_percent" => d with { Order = order with { AskedNoLoadCurrent_percent = value } },
             "excitedWinding.lineVoltage_V" => d with { ExcitedWinding = winding with { LineVoltage_V = value } },
             "excitedWinding.turns" => d with { ExcitedWinding = winding with { Turns = value } },
+            "excitedWinding.tap_percent" => d with { ExcitedWinding = winding with { Tap_percent = value } },
+            "otherWinding.lineVoltage_V" => d with { OtherWinding = new() { Connection = "D", LineVoltage_V = value } },
+            "otherWinding.turns" => d with { OtherWinding = new() { Connection = "D", LineVoltage_V = 20000, Turns = value } },
+            "otherWinding.tap_percent" => d with { OtherWinding = new() { Connection = "D", LineVoltage_V = 20000, Tap_percent = value } },
+            "tertiary.turns" => d with { Tertiary = new() { Turns = value } },
+            "tertiary.resistance_ohm" => d with { Tertiary = new() { Resistance_ohm = value } },
+            "capacitance.phase_nF" => d with { Capacitance = new() { Phase_nF = value, LineVoltage_kV = 110 } },
+            "capacitance.lineVoltage_kV" => d with { Capacitance = new() { Phase_nF = 6, LineVoltage_kV = value } },
+            "core.units" => Designs.TwoLimb with { Core = Designs.TwoLimb.Core! with { Units = (int)value } },
+            "core.woundLimbs" => Designs.TwoLimb with { Core = Designs.TwoLimb.Core! with { WoundLimbs = (int)value } },
+            "core.returnLimb.areaFactor" => d with { Core = core with { Form = "fiveLimb", ReturnLimb = new() { AreaFactor = value } } },
+            "core.returnWindowWidth_mm" => d with { Core = core with { Form = "fiveLimb", ReturnWindowWidth_mm = value } },
+            "model.zeroSequenceReactance_pu" => d with { Model = new() { ZeroSequenceReactance_pu = value } },
             "excitedWinding.resistance_ohm" => d with { ExcitedWinding = winding with { Resistance_ohm = value } },
             "core.limb.diameter_mm" => d with { Core = core with { Limb = core.Limb! with { Diameter_mm = value } } },
             "core.limb.steps" => d with { Core = core with { Limb = core.Limb! with { Steps = (int)value } } },
