@@ -50,7 +50,7 @@ internal static partial class HandbookTable
     public static string Deviation(double ours, double theirs) => Percent((ours / theirs) - 1);
 
     /// <summary>A share in per cent, with its sign.</summary>
-    public static string Percent(double share) => (100 * share).ToString("+0.0;−0.0;0.0", CultureInfo.InvariantCulture) + " %";
+    public static string Percent(double share) => (100 * share).ToString("+0.0;−0.0;0.0", CultureInfo.InvariantCulture) + "\u00a0%";
 
     private static string Line(string[] cells) => $"| {string.Join(" | ", cells)} |";
 

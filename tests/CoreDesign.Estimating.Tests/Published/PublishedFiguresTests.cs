@@ -175,7 +175,7 @@ public class PublishedFiguresTests
 
     private static IEnumerable<double> Every<TA, TB>(IEnumerable<TA> x, IEnumerable<TB> y, Func<TA, TB, double> of) => from a in x from b in y select of(a, b);
 
-    private static string Scattered(double value, double deviation) => string.Create(CultureInfo.InvariantCulture, $"{value:0.000} ± {deviation:0.000}");
+    private static string Scattered(double value, double deviation) => string.Create(CultureInfo.InvariantCulture, $"{value:0.000}\u00a0±\u00a0{deviation:0.000}");
 
-    private static string Whole(double share) => (100 * share).ToString("0", CultureInfo.InvariantCulture).Replace('-', '−') + " %";
+    private static string Whole(double share) => (100 * share).ToString("0", CultureInfo.InvariantCulture).Replace('-', '−') + "\u00a0%";
 }
