@@ -69,7 +69,18 @@ public static class Places
         new("error", "/error"),
     ];
 
-    public static Place Find(string name) => Design.Concat(Others).Single(p => p.Name == name);
+    /// <summary>Circuits of one's own.</summary>
+    public static IReadOnlyList<Place> Trials { get; } =
+    [
+        new("circuits", "/circuits"),
+        new("circuits-example", "/circuits") { Enter = ExampleAsync },
+        new("circuits-in-error", "/circuits") { Enter = CircuitInErrorAsync },
+        new("circuits-unsolvable", "/circuits") { Enter = v => SolveAsync(v, Circuits.Ring.Replace("\"to\": \"p\"", "\"to\": \"r\"", StringComparison.Ordinal), ".said .msg") },
+        new("circuits-largest", "/circuits") { Enter = v => SolveAsync(v, Circuits.Largest, ".branches") },
+        new("circuits-many-errors", "/circuits") { Enter = v => SolveAsync(v, Circuits.Largest.Replace("\"area\":0.003", "\"area\":-1", StringComparison.Ordinal), ".errors") },
+    ];
+
+    public static Place Find(string name) => Design.Concat(Others).Concat(Trials).Single(p => p.Name == name);
 
     private static IEnumerable<Place> Chapters(params string[] names) => names.Select(name => new Place($"handbook-{name}", $"/handbook/{name}"));
 
@@ -171,6 +182,26 @@ public static class Places
         await SolvedAsync(v);
         await v.Page.EvaluateAsync("() => { const b = document.getElementById('components-reconnect-modal'); b.classList.add('components-reconnect-failed'); b.showPopover(); }");
         await Expect(v.Page.Locator("#components-reconnect-modal .fail")).ToBeVisibleAsync();
+    }
+
+    private static async Task ExampleAsync(Visitor v)
+    {
+        await v.Page.GetByRole(AriaRole.Button, new() { Name = "Solve the example" }).ClickAsync();
+        await Expect(v.Page.Locator(".branches")).ToBeVisibleAsync();
+    }
+
+    private static async Task CircuitInErrorAsync(Visitor v)
+    {
+        await ExampleAsync(v);
+        var text = await v.Page.Locator("#circuit").InputValueAsync();
+        await SolveAsync(v, text.Replace("\"V\": 400", "\"V\": \"400\"", StringComparison.Ordinal).Replace("\"area\": 1,", "\"aera\": 1,", StringComparison.Ordinal), ".errors");
+    }
+
+    private static async Task SolveAsync(Visitor v, string text, string answer)
+    {
+        await v.Page.Locator("#circuit").FillAsync(text);
+        await v.Page.GetByRole(AriaRole.Button, new() { Name = "Solve", Exact = true }).ClickAsync();
+        await Expect(v.Page.Locator(answer)).ToBeVisibleAsync();
     }
 
     private static async Task PasteAsync(Visitor v, string text, string answer)

@@ -15,6 +15,17 @@ window.coreDesign = {
     field?.focus();
     field?.select?.();
   },
+  // Mark a line of a long text, from 1, and bring it into view.
+  showLine(id, line) {
+    const field = document.getElementById(id);
+    if (!field) return;
+    const lines = field.value.split('\n');
+    const from = lines.slice(0, line - 1).reduce((sum, l) => sum + l.length + 1, 0);
+    field.focus();
+    field.setSelectionRange(from, from + (lines[line - 1] ?? '').length);
+    field.scrollTop = (line - 4) * parseFloat(getComputedStyle(field).lineHeight);
+    field.scrollLeft = 0;
+  },
   showDialog(dialog) { if (!dialog.open) dialog.showModal(); },
   closeDialog(dialog) { dialog.close(); },
   // Small conveniences of one person at one browser, such as the name one saves under; never anything that matters.

@@ -61,6 +61,9 @@ public sealed record CaseWaveforms
     [JsonPropertyName("i")]
     public required IReadOnlyDictionary<string, double[]> I { get; init; }
 
+    /// <summary>Currents of the supply lines; in a delta they are not those of the windings.</summary>
+    public required IReadOnlyDictionary<string, double[]> Lines { get; init; }
+
     [JsonPropertyName("B")]
     public required IReadOnlyDictionary<string, double[]> B { get; init; }
 }

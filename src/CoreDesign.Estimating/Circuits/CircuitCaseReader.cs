@@ -37,6 +37,7 @@ internal sealed class CircuitCaseReader(CircuitCase @case)
 
         foreach (var (name, material) in @case.Materials ?? new Dictionary<string, CaseMaterial>())
         {
+            _findings.Plain("materials", name);
             _laws[name] = CircuitMaterials.Read($"materials.{name}", material, _findings);
         }
 

@@ -1,5 +1,6 @@
 using System.Globalization;
 using CoreDesign.Estimating.Contracts;
+using CoreDesign.Estimating.Steels.Checks;
 
 namespace CoreDesign.Estimating.Circuits;
 
@@ -13,7 +14,7 @@ internal sealed class CircuitFindings
 
     public void Say(string path, string message) => _errors.Add(new FieldError(path, message));
 
-    /// <summary>A name that must be there.</summary>
+    /// <summary>A name that must be there, of characters that can be seen: it is shown in tables and charts.</summary>
     public string Text(string path, string? value)
     {
         if (string.IsNullOrWhiteSpace(value) || value.Length > LongestName)
@@ -22,7 +23,16 @@ internal sealed class CircuitFindings
             return value ?? "";
         }
 
+        Plain(path, value);
         return value;
+    }
+
+    public void Plain(string path, string name)
+    {
+        if (!NameRules.IsPlain(name))
+        {
+            Say(path, "The name holds control or invisible characters. Type it again as plain text.");
+        }
     }
 
     /// <summary>A value that must be there and within the limits, which count as within.</summary>

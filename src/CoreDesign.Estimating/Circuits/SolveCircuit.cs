@@ -12,6 +12,9 @@ public static class SolveCircuit
     private const int HighestHarmonic = 13;
     private const int WaveformPoints = 96;
 
+    public const int MostBranches = CircuitCaseReader.MaxBranches;
+    public const int MostWindings = CircuitCaseReader.MaxWindings;
+
     /// <summary>Default that is a multiple of 96, so that the waveforms of the answer need no interpolation.</summary>
     public const int DefaultPoints = 384;
 
@@ -76,6 +79,7 @@ public static class SolveCircuit
             {
                 Points = WaveformPoints,
                 I = windings.ToDictionary(w => w.Name, w => Resample(w.Wave), StringComparer.Ordinal),
+                Lines = lines.ToDictionary(l => l.Name, l => Resample(l.Current_A), StringComparer.Ordinal),
                 B = density.ToDictionary(d => d.Name, d => Resample(d.Wave), StringComparer.Ordinal),
             },
             KernelVersion = Kernel.Version,

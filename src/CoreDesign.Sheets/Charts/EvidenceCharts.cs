@@ -11,7 +11,8 @@ public static class EvidenceCharts
         ArgumentNullException.ThrowIfNull(o);
         var limbs = Limbs(r);
         var peaks = limbs.Select(l => $"{l.Name} {Figures.With(Figures.Fixed(l.Values.Max(Math.Abs), 2), "T")}");
-        return Period(r, o, "flux", "Flux over one period", $"Flux density of each limb over one period. Peaks: {string.Join(", ", peaks)}.", "flux density of the limb, T", "T", "flux density", limbs);
+        var words = new PeriodWords("flux", "Flux over one period", $"Flux density of each limb over one period. Peaks: {string.Join(", ", peaks)}.", "flux density", "T") { Caption = "flux density of the limb" };
+        return PeriodChart.Of(words, r.Inputs.Order?.Frequency_Hz, limbs, o);
     }
 
     public static Chart CurrentOverPeriod(EstimateResult r, ChartOptions o)
@@ -21,7 +22,8 @@ public static class EvidenceCharts
         var lines = r.Lines.Select(l => (Name: l.Phase, Values: l.Waveform_A)).ToArray();
         var peaks = r.Lines.Select(l => $"{l.Phase} {Figures.With(Figures.Significant(l.Rms_A, 3), "A")} rms, {Figures.With(Figures.Significant(l.Peak_A, 3), "A")} peak");
         var what = r.Lines.Count == 1 ? "current" : "line current";
-        return Period(r, o, "current", "Current over one period", $"No-load {what} over one period: {string.Join("; ", peaks)}.", $"{what}, A", "A", what, lines);
+        var words = new PeriodWords("current", "Current over one period", $"No-load {what} over one period: {string.Join("; ", peaks)}.", what, "A") { Caption = what };
+        return PeriodChart.Of(words, r.Inputs.Order?.Frequency_Hz, lines, o);
     }
 
     /// <param name="limb">Place of the limb in the result, 0 the first.</param>
@@ -43,27 +45,6 @@ public static class EvidenceCharts
     /// <summary>Names of the limbs as the drawing writes them.</summary>
     internal static (string Name, IReadOnlyList<double> Values)[] Limbs(EstimateResult r) =>
         [.. r.Limbs.Select((l, i) => (Drawings.CoreZones.Mark(r, i), l.FluxDensity_T))];
-
-    private static Chart Period(EstimateResult r, ChartOptions o, string key, string title, string description, string caption, string unit, string what, (string Name, IReadOnlyList<double> Values)[] all)
-    {
-        var period = r.Inputs.Order?.Frequency_Hz is { } f && f > 0 ? 1000 / f : (double?)null;
-        var (span, xName, xUnit) = period is { } p ? (p, "time", "ms") : (360, "angle", "\u00B0");
-        var top = all.SelectMany(s => s.Values).Select(Math.Abs).DefaultIfEmpty(1).Max();
-        var chart = new ChartBuilder(o, Axis.Exact(0, span, 4), Axis.Linear(-top, top, 4), null, caption, $"{xName}, {xUnit}");
-
-        // The accent line lies on top: last drawn.
-        foreach (var i in Enumerable.Range(0, all.Length).OrderBy(i => i == 1 ? 1 : 0))
-        {
-            var values = Closed(all[i].Values);
-            var x = Enumerable.Range(0, values.Count).Select(k => span * k / (values.Count - 1)).ToArray();
-            chart.Line(new(all[i].Name, unit, x, values, LineLook.Of(i)) { Label = all.Length > 1 ? all[i].Name : null });
-        }
-
-        var points = all.Select(s => s.Values.Count).DefaultIfEmpty(0).Max();
-        var columns = new List<ChartColumn> { new($"{xName} ({xUnit})", [.. Enumerable.Range(0, points).Select(i => span * i / points)]) };
-        columns.AddRange(all.Select(s => new ChartColumn($"{what} {s.Name} ({unit})", s.Values)));
-        return chart.Build(key, title, description, xName, xUnit, new ChartTable(key + ".csv", columns));
-    }
 
     private static List<double> Closed(IReadOnlyList<double> values) => values.Count == 0 ? [] : [.. values, values[0]];
 }

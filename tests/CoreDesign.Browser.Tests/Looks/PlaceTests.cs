@@ -45,6 +45,16 @@ public sealed class DesignPlaceTests(Site site, Records records) : PlaceTests(si
     public Task Place_has_no_barrier_and_nothing_is_cut_off(string name) => HoldsAsync(name);
 }
 
+/// <summary>The states of the page for circuits of one's own.</summary>
+public sealed class TrialPlaceTests(Site site, Records records) : PlaceTests(site, records)
+{
+    public static TheoryData<string> Names => [.. Places.Trials.Select(p => p.Name)];
+
+    [Theory]
+    [MemberData(nameof(Names))]
+    public Task Place_has_no_barrier_and_nothing_is_cut_off(string name) => HoldsAsync(name);
+}
+
 /// <summary>All other pages.</summary>
 public sealed class OtherPlaceTests(Site site, Records records) : PlaceTests(site, records)
 {

@@ -41,6 +41,8 @@
         block = a;
         if (!rolls && rects.some(r => r.right > box.right + slack || r.left < box.left - slack)) say(`reaches out of ${name(a)}`, node.data);
       }
+      // Rows that a list has rolled out of its frame lie over nothing.
+      if (['auto', 'scroll'].includes(s.overflowY) && a !== document.body && a !== document.documentElement) rects = rects.filter(r => r.bottom > box.top && r.top < box.bottom);
       if (['auto', 'scroll'].includes(s.overflowX) && a !== document.body && a !== document.documentElement) { rolls = true; break; }
       if (['hidden', 'clip'].includes(s.overflowX) && rects.some(r => r.right > box.right + slack || r.left < box.left - slack)) say(`cut off at the side of ${name(a)}`, node.data);
       if (['hidden', 'clip'].includes(s.overflowY) && rects.some(r => r.bottom > box.bottom + 3 || r.top < box.top - 3)) say(`cut off at the foot of ${name(a)}`, node.data);

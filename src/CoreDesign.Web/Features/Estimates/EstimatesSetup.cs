@@ -1,4 +1,6 @@
+using CoreDesign.Estimating.Circuits;
 using CoreDesign.Estimating.Estimate;
+using CoreDesign.Web.Features.Circuits;
 using CoreDesign.Web.Features.Design;
 using CoreDesign.Web.Features.Designs;
 using CoreDesign.Web.Features.Steels;
@@ -16,6 +18,7 @@ public static class EstimatesSetup
             var steels = services.GetRequiredService<SteelShelf>();
             return (design, cancel) => Task.Run(() => TimedSolve.Run(TimedSolve.Study, limit => StudyDesign.Run(design, steels.Current, limit), cancel), cancel);
         });
+        builder.Services.AddSingleton(new CircuitEngine(SolveCircuit.Run));
         builder.Services.AddSingleton(services =>
         {
             var steels = services.GetRequiredService<SteelShelf>();
