@@ -1,3 +1,4 @@
 using System.Runtime.CompilerServices;
 
 [assembly: InternalsVisibleTo("CoreDesign.Magnetics.Tests")]
+[assembly: InternalsVisibleTo("CoreDesign.Benchmarks")]

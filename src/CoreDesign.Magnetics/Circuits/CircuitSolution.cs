@@ -12,31 +12,27 @@ public sealed class CircuitSolution
     private double[][]? _flux;
     private double[][]? _rate;
     private double[][]? _mmf;
+    private double[]? _hysteresis;
+    private double[]? _classical;
+    private double[]? _excess;
+    private double[]? _extra;
 
     internal CircuitSolution(SolverRun run, PathWaves[] paths, double[][] current)
     {
         _run = run;
         _places = run.Prepared.Places;
         _paths = paths;
-        var n = _places.Length;
-        HysteresisLoss_W = new double[n];
-        ClassicalLoss_W = new double[n];
-        ExcessLoss_W = new double[n];
-        ExtraLoss_W = new double[n];
-        for (var b = 0; b < n; b++)
+        foreach (var path in paths)
         {
-            var (branch, place) = (Circuit.Branches[b], _places[b]);
-            ExtraLoss_W[b] = run.BranchExtra(b) * paths[place.Path].MeanSquareRate;
-            if (place.Steel >= 0)
+            for (var i = 0; i < path.Heat.Length; i++)
             {
-                var heat = paths[place.Path].Heat[place.Steel];
-                var volume = branch.Area_m2 * branch.Length_m;
-                HysteresisLoss_W[b] = heat.Hysteresis_W_per_m3 * volume;
-                ClassicalLoss_W[b] = heat.Classical_W_per_m3 * volume;
-                ExcessLoss_W[b] = heat.Excess_W_per_m3 * volume;
+                CoreLoss_W += path.Heat[i].Total_W_per_m3 * path.Path.Steel[i].Area_m2 * path.Path.Steel[i].Length_m;
             }
+        }
 
-            CoreLoss_W += BranchLoss_W(b);
+        for (var p = 0; p < paths.Length; p++)
+        {
+            CoreLoss_W += run.PathExtra[p] * paths[p].MeanSquareRate;
         }
 
         WindingCurrent_A = new double[current.Length][];
@@ -79,14 +75,14 @@ public sealed class CircuitSolution
     public double[][] WindingCurrent_A { get; }
 
     /// <summary>Heat of hysteresis, counted along the path of the flux; independent of the terminal power.</summary>
-    public double[] HysteresisLoss_W { get; }
+    public double[] HysteresisLoss_W => _hysteresis ??= BranchHeat(h => h.Hysteresis_W_per_m3);
 
-    public double[] ClassicalLoss_W { get; }
+    public double[] ClassicalLoss_W => _classical ??= BranchHeat(h => h.Classical_W_per_m3);
 
-    public double[] ExcessLoss_W { get; }
+    public double[] ExcessLoss_W => _excess ??= BranchHeat(h => h.Excess_W_per_m3);
 
     /// <summary>Heat of the extra-loss term.</summary>
-    public double[] ExtraLoss_W { get; }
+    public double[] ExtraLoss_W => _extra ??= [.. _places.Select((p, b) => _run.BranchExtra(b) * _paths[p.Path].MeanSquareRate)];
 
     public double CopperLoss_W { get; }
 
@@ -125,6 +121,18 @@ public sealed class CircuitSolution
         }
 
         return new CircuitSolution(run, paths, run.Currents(paths, []));
+    }
+
+    private double[] BranchHeat(Func<SteelWave, double> part)
+    {
+        var heat = new double[_places.Length];
+        for (var b = 0; b < heat.Length; b++)
+        {
+            var (branch, place) = (Circuit.Branches[b], _places[b]);
+            heat[b] = place.Steel < 0 ? 0 : part(_paths[place.Path].Heat[place.Steel]) * branch.Area_m2 * branch.Length_m;
+        }
+
+        return heat;
     }
 
     private double[] BranchMmf(int b)

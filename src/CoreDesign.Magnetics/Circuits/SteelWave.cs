@@ -19,6 +19,8 @@ internal sealed class SteelWave
 
     public double Excess_W_per_m3 { get; private init; }
 
+    public double Total_W_per_m3 => Hysteresis_W_per_m3 + Classical_W_per_m3 + Excess_W_per_m3;
+
     /// <summary>Any waveform of flux and its rate over <paramref name="points"/> a period, or half as many, through one square metre divided by <paramref name="perArea"/>.</summary>
     public static SteelWave Of(SheetLaw law, double[] flux, double[] rate, double perArea, int points, double frequency_Hz)
     {

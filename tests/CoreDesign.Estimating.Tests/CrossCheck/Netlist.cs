@@ -13,7 +13,10 @@ internal static class Netlist
     private const int Periods = 3;
     private const double StopConductance = 1e6;
 
-    public static string Write(RandomCircuit circuit, int stepsPerPeriod)
+    /// <param name="circuit">The circuit.</param>
+    /// <param name="stepsPerPeriod">Longest step of the simulator, and spacing of its answer.</param>
+    /// <param name="tolerance">Relative tolerance of each of its steps.</param>
+    public static string Write(RandomCircuit circuit, int stepsPerPeriod, double tolerance = 1e-6)
     {
         var @case = circuit.Case;
         var ground = @case.Branches![0].From;
@@ -31,7 +34,7 @@ internal static class Netlist
         AddSupply(@case, lines);
         var period = 1 / @case.Frequency!.Value;
         var currents = string.Join(' ', @case.Windings!.Select(w => $"i(Vw{w.Name})"));
-        lines.Add(".options reltol=1e-6 abstol=1e-9 vntol=1e-7 method=trap maxord=2 itl4=200");
+        lines.Add($".options reltol={Text(tolerance)} abstol=1e-9 vntol=1e-7 method=trap maxord=2 itl4=200");
         lines.Add($".tran {Text(period / stepsPerPeriod)} {Text(Periods * period)} {Text((Periods - 1) * period)} {Text(period / stepsPerPeriod)} UIC");
         lines.AddRange([".control", "set wr_singlescale", "set numdgt=12", "run", $"linearize {currents}", $"wrdata currents.txt {currents}", "quit", ".endc", ".end"]);
         return string.Join('\n', lines) + "\n";
@@ -52,6 +55,12 @@ internal static class Netlist
             if (steel.Sigma is { } sigma)
             {
                 drops.Add($"{Text(length * sigma * steel.D!.Value * steel.D.Value / 12 / area)}*v(d{name})");
+            }
+
+            if (steel.KExc is { } excess)
+            {
+                var rate = $"v(d{name})/{Text(area)}";
+                drops.Add($"{Text(length * excess)}*{rate}*pow({rate}*{rate} + {Text(steel.S0!.Value * steel.S0.Value)}, -0.25)");
             }
 
             foreach (var (stop, i) in (steel.Stops ?? []).Select((s, i) => (s, i)))

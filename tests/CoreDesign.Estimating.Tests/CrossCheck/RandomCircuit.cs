@@ -13,7 +13,7 @@ internal sealed record RandomCircuit(CircuitCase Case, double A, double B, int E
 
     /// <param name="form">shell (single phase, two return limbs), threeLimb, fiveLimb.</param>
     /// <param name="connection">As the format has it.</param>
-    /// <param name="eddy">With classical eddy currents.</param>
+    /// <param name="eddy">With classical eddy currents and excess loss.</param>
     /// <param name="stops">With hysteresis.</param>
     /// <param name="random">Where the numbers come from.</param>
     public static RandomCircuit Draw(string form, string connection, bool eddy, bool stops, Random random)
@@ -30,6 +30,8 @@ internal sealed record RandomCircuit(CircuitCase Case, double A, double B, int E
             H = Array.ConvertAll(flux, x => (a * x) + (b * Math.Pow(x, exponent))),
             Sigma = eddy ? 2e6 : null,
             D = eddy ? In(0.23e-3, 0.35e-3) : null,
+            KExc = eddy ? In(0.2, 0.6) : null,
+            S0 = eddy ? 1 : null,
             Stops = stops ? [new() { R = In(0.05, 0.2), W = In(20, 60) }, new() { R = In(0.4, 0.9), W = In(5, 20) }] : null,
         };
         var branches = form == "shell" ? Shell(area, In) : Limbs(area, form == "fiveLimb", In);
