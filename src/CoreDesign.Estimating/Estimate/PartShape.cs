@@ -40,7 +40,7 @@ internal static class PartShape
             Mass_kg = density_kg_m3 * (steel?.Volume_m3 ?? 0),
             PeakFluxDensity_T = Peak(core, branches),
             Loss_W = branches.Sum(core.Solution.BranchLoss_W),
-            ExcitingPower_VA = branches.Sum(b => Waveform.Rms(core.Solution.Mmf_A[b]) * Waveform.Rms(core.Solution.FluxRate_Wb_per_s[b])),
+            ExcitingPower_VA = branches.Sum(b => Waveform.Rms(core.Solution.Mmf_A[b]) * Math.Sqrt(core.Solution.MeanSquareRate(b))),
         };
     }
 

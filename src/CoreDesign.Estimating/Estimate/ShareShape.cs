@@ -14,8 +14,7 @@ internal static class ShareShape
     public static IReadOnlyList<ShareResult> Of(CoreSolution core)
     {
         var s = core.Solution;
-        var current = CurrentOf(s);
-        var extra = CurrentOf(s, (b, t) => s.ExtraLossCoefficient(b) * s.FluxRate_Wb_per_s[b][t]);
+        var current = CurrentShares.Of(s);
         var kinds = core.Core.Geometry.Parts.ToDictionary(p => p.Name, p => p.Kind, StringComparer.Ordinal);
         (string Cause, string Label, Func<string, bool> Has)[] steel =
         [
@@ -29,10 +28,10 @@ internal static class ShareShape
         foreach (var (cause, label, has) in steel)
         {
             var branches = core.Core.Parts.Where(p => has(p.Part)).SelectMany(p => p.Branches).ToList();
-            shares.Add((cause, label, branches.Sum(b => s.BranchLoss_W(b) - s.ExtraLoss_W[b]), branches.Sum(b => current[b] - extra[b])));
+            shares.Add((cause, label, branches.Sum(b => s.BranchLoss_W(b) - s.ExtraLoss_W[b]), branches.Sum(b => current[b].Whole - current[b].Extra)));
         }
 
-        shares.Add(("zoneExtra", "Joint and T zones, building factor", s.ExtraLoss_W.Sum(), extra.Sum()));
+        shares.Add(("zoneExtra", "Joint and T zones, building factor", s.ExtraLoss_W.Sum(), current.Sum(c => c.Extra)));
 
         // The air path carries flux with an isolated star, or where other fluxes are free too.
         var air = 1 - shares.Sum(x => x.Current);
@@ -51,23 +50,5 @@ internal static class ShareShape
                 Current_percent = 100 * x.Current,
             })
             .OrderByDescending(x => x.Loss_W)];
-    }
-
-    /// <summary>
-    /// Exact where the linkages settle the fluxes. With a free neutral or winding resistance each branch's share is its part of the reactive and
-    /// active MMF work, rms F times rms rate, which also adds to one.
-    /// </summary>
-    private static double[] CurrentOf(CircuitSolution s, Func<int, int, double>? part = null)
-    {
-        if (s.FluxPerLinkage is not null)
-        {
-            return CurrentShares.Of(s, part);
-        }
-
-        double Work(int b, Func<int, double> mmf) =>
-            Waveform.Rms([.. Enumerable.Range(0, s.Points).Select(mmf)]) * Waveform.Rms(s.FluxRate_Wb_per_s[b]);
-        var all = Enumerable.Range(0, s.Circuit.Branches.Count).Select(b => Work(b, t => s.Mmf_A[b][t])).ToArray();
-        var total = all.Sum();
-        return [.. all.Select((w, b) => (part is null ? w : Work(b, t => part(b, t))) / total)];
     }
 }

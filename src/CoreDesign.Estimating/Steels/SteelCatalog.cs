@@ -1,4 +1,5 @@
 using System.Globalization;
+using System.Runtime.CompilerServices;
 using System.Security.Cryptography;
 using System.Text;
 
@@ -7,6 +8,9 @@ namespace CoreDesign.Estimating.Steels;
 /// <summary>The built-in grades and a works' own, by name (upper or lower case alike).</summary>
 public sealed class SteelCatalog
 {
+    // A grade never changes; its digest takes longer than a solve.
+    private static readonly ConditionalWeakTable<SteelGrade, string> Revisions = [];
+
     private const double ThicknessReach_mm = 0.04;
     private readonly Dictionary<string, SteelGrade> _byName;
 
@@ -72,7 +76,7 @@ public sealed class SteelCatalog
     }
 
     /// <summary>Short hash of one steel's data, to be kept with what was computed from it.</summary>
-    public static string RevisionOf(SteelGrade grade) => Hash([grade]);
+    public static string RevisionOf(SteelGrade grade) => Revisions.GetValue(grade, g => Hash([g]));
 
     private static double? LossAt17T50(SteelGrade grade) => grade.Rolling.Loss
         .Where(c => c.Frequency_Hz == 50)

@@ -65,9 +65,9 @@ public sealed class CircuitSolution
 
     public int Points => _run.Points;
 
-    public double[][] Flux_Wb => _flux ??= Array.ConvertAll(_places, p => Signed(_paths[p.Path].Flux_Wb, p.Sign));
+    public double[][] Flux_Wb => _flux ??= OfPaths(p => p.Flux_Wb);
 
-    public double[][] FluxRate_Wb_per_s => _rate ??= Array.ConvertAll(_places, p => Signed(_paths[p.Path].Rate_Wb_per_s, p.Sign));
+    public double[][] FluxRate_Wb_per_s => _rate ??= OfPaths(p => p.Rate_Wb_per_s);
 
     /// <summary>MMF drop of each branch, without its windings.</summary>
     public double[][] Mmf_A => _mmf ??= [.. Enumerable.Range(0, _places.Length).Select(BranchMmf)];
@@ -121,6 +121,15 @@ public sealed class CircuitSolution
         }
 
         return new CircuitSolution(run, paths, run.Currents(paths, []));
+    }
+
+    /// <summary>Branches of one path and sign share an array.</summary>
+    private double[][] OfPaths(Func<PathWaves, double[]> wave)
+    {
+        var (along, against) = (new double[_paths.Length][], new double[_paths.Length][]);
+        return Array.ConvertAll(_places, p => p.Sign > 0
+            ? along[p.Path] ??= Signed(wave(_paths[p.Path]), 1)
+            : against[p.Path] ??= Signed(wave(_paths[p.Path]), -1));
     }
 
     private double[] BranchHeat(Func<SteelWave, double> part)

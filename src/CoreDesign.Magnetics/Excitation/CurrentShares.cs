@@ -2,38 +2,59 @@ using CoreDesign.Magnetics.Circuits;
 
 namespace CoreDesign.Magnetics.Excitation;
 
-/// <summary>
-/// Splits the currents of the supply's windings by cause. Currents follow linearly from the branches' MMFs, i = G(transposed)·F with G the flux per linkage, so the sum of squares
-/// of all currents is the sum over branches of F times the flux that linkages equal to the currents would give. Each term is that branch's share;
-/// shares add to one, and a share may be negative where a branch lowers the current.
-/// </summary>
+/// <summary>A branch's share of the current, and of that the part of its extra loss.</summary>
+public readonly record struct CurrentShare(double Whole, double Extra);
+
+/// <summary>Splits the currents of the supply's windings by cause. Shares add to one, and a share may be negative where a branch lowers the current.</summary>
 public static class CurrentShares
 {
-    /// <summary>Share of each branch's MMF, and of the part of it that <paramref name="part"/> gives (null for the whole).</summary>
-    /// <exception cref="InvalidOperationException">The linkages alone do not settle the fluxes of this circuit.</exception>
-    public static double[] Of(CircuitSolution solution, Func<int, int, double>? part = null)
+    /// <summary>
+    /// Where linkages settle the fluxes, currents follow linearly from the branches' MMFs, i = G(transposed)·F with G the flux per linkage, so the sum of squares of all
+    /// currents is the sum over branches of F times the flux that linkages equal to the currents would give: each term is that branch's share. With a free neutral
+    /// or winding resistance a branch's share is its part of the reactive and active MMF work, rms F times rms rate.
+    /// </summary>
+    public static CurrentShare[] Of(CircuitSolution solution)
     {
         ArgumentNullException.ThrowIfNull(solution);
-        var g = solution.FluxPerLinkage ?? throw new InvalidOperationException("Shares need a circuit whose fluxes follow from the linkages.");
-        double[][] windings = [.. solution.WindingCurrent_A.Where((_, w) => solution.Circuit.Windings[w].Phase != WindingPhase.Closed)];
-        var total = windings.Sum(w => w.Sum(i => i * i));
-        var shares = new double[solution.Circuit.Branches.Count];
-        for (var b = 0; total > 0 && b < shares.Length; b++)
+        var shares = new CurrentShare[solution.Circuit.Branches.Count];
+        for (var b = 0; b < shares.Length; b++)
         {
-            for (var t = 0; t < solution.Points; t++)
-            {
-                var flux = 0.0;
-                for (var w = 0; w < windings.Length; w++)
-                {
-                    flux += g[b, w] * windings[w][t];
-                }
-
-                shares[b] += flux * (part is null ? solution.Mmf_A[b][t] : part(b, t));
-            }
-
-            shares[b] /= total;
+            shares[b] = solution.FluxPerLinkage is { } g ? Linear(solution, g, b) : Work(solution, b);
         }
 
-        return shares;
+        var total = shares.Sum(s => s.Whole);
+        return total > 0 ? Array.ConvertAll(shares, s => new CurrentShare(s.Whole / total, s.Extra / total)) : shares;
+    }
+
+    private static CurrentShare Linear(CircuitSolution s, double[,] g, int b)
+    {
+        double[] mmf = s.Mmf_A[b], rate = s.FluxRate_Wb_per_s[b];
+        double whole = 0, extra = 0;
+        for (var w = 0; w < s.WindingCurrent_A.Length; w++)
+        {
+            if (g[b, w] == 0 || s.Circuit.Windings[w].Phase == WindingPhase.Closed)
+            {
+                continue;
+            }
+
+            var current = s.WindingCurrent_A[w];
+            double withMmf = 0, withRate = 0;
+            for (var t = 0; t < current.Length; t++)
+            {
+                withMmf += current[t] * mmf[t];
+                withRate += current[t] * rate[t];
+            }
+
+            whole += g[b, w] * withMmf;
+            extra += g[b, w] * withRate * s.ExtraLossCoefficient(b);
+        }
+
+        return new(whole, extra);
+    }
+
+    private static CurrentShare Work(CircuitSolution s, int b)
+    {
+        var rate = Math.Sqrt(s.MeanSquareRate(b));
+        return new(Waveform.Rms(s.Mmf_A[b]) * rate, s.ExtraLossCoefficient(b) * rate * rate);
     }
 }
