@@ -10,6 +10,7 @@ internal sealed class CoreAtWork
     /// <summary>A multiple of 96, so that thirds and halves of a period fall on points.</summary>
     public const int PointsPerPeriod = 288;
     private readonly CoreCircuit _core;
+    private readonly PreparedCore _excited;
 
     /// <exception cref="ArgumentException">Steel curves that no law fits.</exception>
     /// <exception cref="JointSolveException">The joint lattice has no balance.</exception>
@@ -29,6 +30,7 @@ internal sealed class CoreAtWork
             new JointBranch(Joint?.Curve?.Drop, design.EffectiveGap_m ?? 0),
             ZeroSequenceReluctance_A_per_Wb);
         _core = design.Units == 3 ? core.AsBank() : core;
+        _excited = Prepare(design.Excited);
     }
 
     public ResolvedDesign Design { get; }
@@ -48,14 +50,12 @@ internal sealed class CoreAtWork
     /// <exception cref="NotConvergedException">No steady state.</exception>
     public CoreSolution Solve(FedWinding winding, double voltage_percent, CancellationToken cancel)
     {
-        var supply = winding.Supply with { Voltage_V = winding.Supply.Voltage_V * voltage_percent / 100 };
-        return CoreSolver.Solve(
-            _core,
-            new CoreExcitation(supply, winding.Turns, winding.Resistance_ohm, Design.Tertiary) { WoundLimbs = Design.WoundLimbs },
-            Design.BuildingFactor.Value,
-            new SolverOptions(PointsPerPeriod),
-            cancel);
+        var core = ReferenceEquals(winding, Design.Excited) ? _excited : Prepare(winding);
+        return core.Solve(winding.Supply.Voltage_V * voltage_percent / 100, Design.BuildingFactor.Value, new SolverOptions(PointsPerPeriod), cancel);
     }
+
+    private PreparedCore Prepare(FedWinding winding) =>
+        new(_core, new CoreExcitation(winding.Supply, winding.Turns, winding.Resistance_ohm, Design.Tertiary) { WoundLimbs = Design.WoundLimbs });
 
     /// <summary>The air path that gives the zero-sequence reactance: X0 = w N²/(3 R) of rated impedance.</summary>
     private static double ZeroSequence(ResolvedDesign design)

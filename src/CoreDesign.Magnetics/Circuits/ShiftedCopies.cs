@@ -6,7 +6,8 @@ internal static class ShiftedCopies
     /// <param name="copies">Branches copy after copy in the order of the one; one winding each.</param>
     /// <param name="one">The solution of one.</param>
     /// <param name="shifts">Points by which each copy is read later than the one.</param>
-    public static CircuitSolution Of(PreparedCircuit copies, CircuitSolution one, int[] shifts)
+    /// <param name="supply">Of the copies together, at the voltage at which the one was solved.</param>
+    public static CircuitSolution Of(PreparedCircuit copies, CircuitSolution one, int[] shifts, Supply supply)
     {
         int n = one.Points, branches = one.Circuit.Branches.Count, count = one.Paths.Length;
         if (copies.Paths.Length != shifts.Length * count || copies.Circuit.Branches.Count != shifts.Length * branches)
@@ -15,7 +16,7 @@ internal static class ShiftedCopies
         }
 
         double[] extra = [.. shifts.SelectMany(_ => Enumerable.Range(0, branches).Select(one.ExtraLossCoefficient))];
-        var run = new SolverRun(copies, copies.Circuit.Supply, extra, one.Run.Options);
+        var run = new SolverRun(copies, supply, extra, one.Run.Options);
         var paths = new PathWaves[copies.Paths.Length];
         var driven = new double[copies.Reduction.Driven.Length][];
         for (var k = 0; k < shifts.Length; k++)

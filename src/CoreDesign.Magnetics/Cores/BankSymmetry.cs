@@ -8,23 +8,25 @@ namespace CoreDesign.Magnetics.Cores;
 /// </summary>
 internal static class BankSymmetry
 {
-    public static bool Holds(CoreCircuit core, CoreExcitation excitation, int points) =>
-        core.Units == 3 && excitation.Tertiary is null && points % 12 == 0
+    public static bool Holds(CoreCircuit core, CoreExcitation excitation) =>
+        core.Units == 3 && excitation.Tertiary is null
         && excitation.Supply.Connection is SupplyConnection.StarWithNeutral or SupplyConnection.Delta;
 
+    public static bool FitsGrid(int points) => points % 12 == 0;
+
     /// <summary>What one unit gets: its phase's voltage, as a single phase.</summary>
-    public static CoreExcitation OfUnit(CoreExcitation excitation)
+    public static CoreExcitation OfUnit(CoreExcitation excitation) => excitation with
     {
-        var line = excitation.Supply.Voltage_V;
-        var phase = excitation.Supply.Connection == SupplyConnection.Delta ? line : line / Math.Sqrt(3);
-        return excitation with { Supply = excitation.Supply with { Connection = SupplyConnection.Single, Voltage_V = phase } };
-    }
+        Supply = excitation.Supply with { Connection = SupplyConnection.Single, Voltage_V = PhaseVoltage_V(excitation.Supply) },
+    };
+
+    public static double PhaseVoltage_V(Supply bank) => bank.Connection == SupplyConnection.Delta ? bank.Voltage_V : bank.Voltage_V / Math.Sqrt(3);
 
     /// <summary>The bank's solution from that of one unit.</summary>
-    public static CircuitSolution Spread(CoreCircuit bank, CoreExcitation excitation, CircuitSolution unit)
+    public static CircuitSolution Spread(PreparedCircuit bank, Supply supply, CircuitSolution unit)
     {
         var n = unit.Points;
-        var lead = excitation.Supply.Connection == SupplyConnection.Delta ? n / 12 : 0;
-        return ShiftedCopies.Of(new PreparedCircuit(bank.With(excitation)), unit, [lead, lead - (n / 3), lead - (2 * n / 3)]);
+        var lead = supply.Connection == SupplyConnection.Delta ? n / 12 : 0;
+        return ShiftedCopies.Of(bank, unit, [lead, lead - (n / 3), lead - (2 * n / 3)], supply);
     }
 }

@@ -31,7 +31,7 @@ internal sealed record RandomCircuit(CircuitCase Case, double A, double B, int E
             Sigma = eddy ? 2e6 : null,
             D = eddy ? In(0.23e-3, 0.35e-3) : null,
             KExc = eddy ? In(0.2, 0.6) : null,
-            S0 = eddy ? 1 : null,
+            S0 = eddy ? 50 : null,
             Stops = stops ? [new() { R = In(0.05, 0.2), W = In(20, 60) }, new() { R = In(0.4, 0.9), W = In(5, 20) }] : null,
         };
         var branches = form == "shell" ? Shell(area, In) : Limbs(area, form == "fiveLimb", In);
