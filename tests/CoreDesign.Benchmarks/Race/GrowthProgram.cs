@@ -23,9 +23,9 @@ internal static class GrowthProgram
         Directory.CreateDirectory(folder);
         (string Name, MagneticCircuit Circuit)[] circuits =
         [
-            ("three-limb YN, all losses", Drawn("threeLimb", "YN", true)),
-            ("five-limb D, single-valued", Drawn("fiveLimb", "D", false)),
-            ("five-limb D, all losses", Drawn("fiveLimb", "D", true)),
+            ("three-limb YN", Drawn("threeLimb", "YN", true)),
+            ("five-limb D, lossless", Drawn("fiveLimb", "D", false)),
+            ("five-limb D", Drawn("fiveLimb", "D", true)),
         ];
         var byPoints = circuits.Select(c => (c.Name, Points.Select(p => Time_us(c.Circuit, p)).ToArray())).ToList();
         Write(folder, "points", "time points in a period", "Time of a solve against points", [.. Points.Select(p => (double)p)], byPoints, "µs");
@@ -88,7 +88,7 @@ internal static class GrowthProgram
 
         Console.WriteLine();
         var all = series.SelectMany(s => s.Y).ToArray();
-        var chart = new ChartBuilder(new ChartOptions { Width = 460, Height = 260 }, Axis.Decades(x[0], x[^1]), Axis.Decades(all.Min(), all.Max()), null, unit, xName);
+        var chart = new ChartBuilder(new ChartOptions { Width = 560, Height = 260 }, Axis.Decades(x[0], x[^1]), Axis.Decades(all.Min(), all.Max()), null, unit, xName);
         foreach (var (s, i) in series.Select((s, i) => (s, i)))
         {
             chart.Line(new(s.Name, unit, x, s.Y, LineLook.Of(i)) { Label = s.Name, Dots = [.. x.Select((v, k) => new Sheets.Scenes.XY(v, s.Y[k]))] });
