@@ -17,6 +17,8 @@ public sealed record CoreSolution(CoreCircuit Core, CircuitSolution Solution)
 /// </summary>
 public sealed class PreparedCore
 {
+    private const int MostPasses = 8;
+    private const double ExtraWithin = 2e-4;
     private readonly CoreCircuit _core;
     private readonly Supply _supply;
     private readonly PreparedCircuit _whole;
@@ -88,7 +90,30 @@ public sealed class PreparedCore
             }
         }
 
-        return bare.WithExtraLoss(coefficients, cancel);
+        return Fitted(bare, coefficients, buildingFactor, cancel);
+    }
+
+    /// <summary>
+    /// Where paths are free, the extra field moves flux between them, and with it the loss that the factor is of: its size is set again until the extra is
+    /// the factor less one times the sheets' loss as it then is. Imposed fluxes fit at once.
+    /// </summary>
+    private static CircuitSolution Fitted(CircuitSolution bare, double[] coefficients, double buildingFactor, CancellationToken cancel)
+    {
+        var laden = bare.WithExtraLoss(coefficients, cancel);
+        for (var pass = 0; pass < MostPasses; pass++)
+        {
+            var found = laden.ExtraLoss_W.Sum();
+            var wanted = (buildingFactor - 1) * (laden.CoreLoss_W - found);
+            if (Math.Abs(found - wanted) < ExtraWithin * laden.CoreLoss_W)
+            {
+                break;
+            }
+
+            coefficients = Array.ConvertAll(coefficients, c => c * wanted / found);
+            laden = bare.WithExtraLoss(coefficients, cancel);
+        }
+
+        return laden;
     }
 
     private static int[] ZoneBranches(CoreCircuit core)
