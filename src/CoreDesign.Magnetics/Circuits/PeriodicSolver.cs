@@ -86,7 +86,7 @@ internal sealed class PeriodicSolver
         {
             // An offset of flux that resistance only slowly wears off, or that hysteresis holds for ever, turns its sign from one half period to the
             // next: the mean of both takes it out at once. What then repeats is the state of a core that was demagnetised.
-            if (_halfWave && sweep > 1 && sweep % 3 != 2 && (hasResistance || change > StalledAbove * before))
+            if (!_run.HasOffset && sweep > 1 && sweep % 3 != 2 && (hasResistance || change > StalledAbove * before))
             {
                 TakeMean();
             }
@@ -129,11 +129,13 @@ internal sealed class PeriodicSolver
 
     private void TakeMean()
     {
+        // Of a whole period its own second half, turned, is the other one.
+        var other = _halfWave ? _before : [.. Enumerable.Range(0, _span).Select(t => Array.ConvertAll(_z[(t + (_span / 2)) % _span], z => -z))];
         for (var t = 0; t < _span; t++)
         {
             for (var i = 0; i < _f; i++)
             {
-                _z[t][i] = 0.5 * (_z[t][i] + _before[t][i]);
+                _z[t][i] = 0.5 * (_z[t][i] + other[t][i]);
             }
         }
 
