@@ -10,7 +10,9 @@ internal sealed record LineLook(Ink Ink, double Width, IReadOnlyList<double>? Da
     public static readonly LineLook Third = new(Ink.Ink3, 1.5, [5, 3]);
     public static readonly LineLook Fourth = new(Ink.Accent, 1.5, [2, 2.5]);
 
-    public static LineLook Of(int index) => (index % 4) switch { 0 => First, 1 => Second, 2 => Third, _ => Fourth };
+    public static readonly LineLook Fifth = new(Ink.Ink2, 1, [8, 2, 2, 2]);
+
+    public static LineLook Of(int index) => (index % 5) switch { 0 => First, 1 => Second, 2 => Third, 3 => Fourth, _ => Fifth };
 }
 
 /// <summary>One line of a chart. Dots mark the points that were solved or given, where the line between them is drawn through.</summary>

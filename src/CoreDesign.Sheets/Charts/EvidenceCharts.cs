@@ -44,7 +44,14 @@ public static class EvidenceCharts
 
     /// <summary>Names of the limbs as the drawing writes them.</summary>
     internal static (string Name, IReadOnlyList<double> Values)[] Limbs(EstimateResult r) =>
-        [.. r.Limbs.Select((l, i) => (Drawings.CoreZones.Mark(r, i), l.FluxDensity_T))];
+        [.. r.Limbs.Select(l => (l.Name["limb".Length..], l.FluxDensity_T))];
+
+    /// <summary>The first limb that carries a winding; what a core is judged by.</summary>
+    public static int FirstWoundLimb(EstimateResult r)
+    {
+        ArgumentNullException.ThrowIfNull(r);
+        return r.Limbs.Index().FirstOrDefault(l => !r.Geometry.Limbs.Any(g => g.Name == l.Item.Name && g.IsReturn)).Index;
+    }
 
     private static List<double> Closed(IReadOnlyList<double> values) => values.Count == 0 ? [] : [.. values, values[0]];
 }

@@ -26,7 +26,7 @@ public static class DesignSheet
         blocks.Add(new Columns([
             (3, [new Heading("Harmonics of the line current"), ResultTables.Harmonics(e)]),
             (2, [new Heading("No-load current"), ResultTables.Currents(e), new Heading("Energy balance"), ResultTables.Energy(e)])]));
-        blocks.Add(new Heading("Plates"));
+        blocks.Add(new Heading(e.Geometry.Units > 1 ? "Plates of one unit" : "Plates"));
         blocks.Add(GeometryTables.Plates(e));
         blocks.AddRange(RestBlocks.All(request));
         var scale = $"1:{Plain(first.FrontScale)} (section 1:{Plain(first.SectionScale)}), dimensions in mm";
@@ -53,7 +53,7 @@ public static class DesignSheet
             supplement.Add(With(Plain(frequency), "Hz"));
         }
 
-        supplement.Add($"{Words.Form(e.Geometry.Form)}, circle {With(Plain(e.Geometry.CircleDiameter_mm, 1), "mm")}");
+        supplement.Add($"{Words.Core(e.Geometry)}, circle {With(Plain(e.Geometry.CircleDiameter_mm, 1), "mm")}");
         return new TitleFields
         {
             LegalOwner = request.LegalOwner,

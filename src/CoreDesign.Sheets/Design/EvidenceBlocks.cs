@@ -12,11 +12,12 @@ internal static class EvidenceBlocks
     public static IEnumerable<Block> All(Study study)
     {
         var e = study.Estimate;
+        var wound = EvidenceCharts.FirstWoundLimb(e);
         yield return new Columns(
             [new Heading("Flux density over one period"), Figure(EvidenceCharts.FluxOverPeriod(e, Half))],
             [new Heading("Line current over one period"), Figure(EvidenceCharts.CurrentOverPeriod(e, Half))]);
         yield return new Columns(
-            [new Heading("Loop of limb " + e.Limbs[0].Name["limb".Length..]), Figure(EvidenceCharts.Loop(e, 0, Half))],
+            [new Heading("Loop of limb " + e.Limbs[wound].Name["limb".Length..]), Figure(EvidenceCharts.Loop(e, wound, Half))],
             [new Heading("Harmonics of the line current"), Figure(HarmonicsChart.Of(e, Half))]);
         if (study.VoltageCurve.Count > 1)
         {

@@ -60,6 +60,12 @@ internal sealed class FirstPage
 
     private (Block Figure, int Scale)? Front(double height)
     {
+        // Without its dimensions the view would be no drawing.
+        if (!Options(_width, height).HasRoom)
+        {
+            return null;
+        }
+
         foreach (var n in Scales)
         {
             // Cheap test first; then the drawing itself knows how much room its dimensions need.

@@ -10,7 +10,12 @@ internal static class GeometryTables
     public static Table Derived(EstimateResult e)
     {
         var g = e.Geometry;
-        return Table.KeyValues(
+        (string, string, bool, bool)[] units = g.Units > 1 ? [("Units alike; all that follows is of one", Plain(g.Units), false, false)] : [];
+        var beside = g.Limbs.FirstOrDefault(l => l.IsReturn);
+        (string, string, bool, bool)[] limb = beside is null ? [] : [("Return limb, width; net area", $"{Mm(beside.Width_mm)}; {With(Fixed(beside.NetArea_mm2, 0), "mm²")}", false, false)];
+        (string, string, bool, bool)[] window = g.ReturnWindowWidth_mm is { } width ? [("Window beside a return limb, width", Mm(width), false, false)] : [];
+        return Table.KeyValues([
+            .. units,
             ("Circle around the limb", Mm(g.CircleDiameter_mm), false, false),
             ("Gross limb area", With(Fixed(g.GrossArea_mm2, 0), "mm²"), false, false),
             ("Net limb area", With(Fixed(g.NetLimbArea_mm2, 0), "mm²"), false, false),
@@ -18,9 +23,12 @@ internal static class GeometryTables
             ("Fill ratio, gross area to circle", Fixed(g.FillRatio, 4), false, false),
             ("Stack height", Mm(g.StackHeight_mm), false, false),
             ("Limb width; yoke height", $"{Mm(g.LimbWidth_mm)}; {Mm(g.YokeHeight_mm)}", false, false),
+            .. limb,
             ("Window, height by width", $"{Plain(g.WindowHeight_mm, 1)} × {Mm(g.WindowWidth_mm)}", false, false),
+            .. window,
             ("Limb pitch", Mm(g.LimbPitch_mm), false, false),
-            ("Overall, width by height", $"{Plain(g.OverallWidth_mm, 1)} × {Mm(g.OverallHeight_mm)}", false, false));
+            ("Overall, width by height", $"{Plain(g.OverallWidth_mm, 1)} × {Mm(g.OverallHeight_mm)}", false, false),
+        ]);
     }
 
     public static Table Excitation(EstimateResult e)
@@ -62,15 +70,15 @@ internal static class GeometryTables
             .. PartGroups.Of(e).Select(p => new Row(
                 p.Name, Plain(p.Count), Fixed(p.Area_mm2, 0), p.Length_mm > 0 ? Fixed(p.Length_mm, 1) : "", p.Mass_kg > 0 ? Fixed(p.Mass_kg, 1) : "",
                 Fixed(p.PeakFluxDensity_T, 3), p.Kind == "joint" ? "" : Fixed(p.Loss_W, 1), Fixed(p.ExcitingPower_VA, 0))),
-            new Row(["Whole core", "", "", "", Fixed(e.Mass_kg.Total, 1), "", Fixed(e.NoLoadLoss_W, 1), Fixed(e.ExcitingPower_VA, 0)], Sum: true),
+            new Row([e.Geometry.Units > 1 ? "All units" : "Whole core", "", "", "", Fixed(e.Mass_kg.Total, 1), "", Fixed(e.NoLoadLoss_W, 1), Fixed(e.ExcitingPower_VA, 0)], Sum: true),
         ]);
 
     public static Table Mass(EstimateResult e) => Table.KeyValues(
         ("Limbs", Kg(e.Mass_kg.Limbs), false, false),
         ("Yokes", Kg(e.Mass_kg.Yokes), false, false),
         ("Corners and T zones", Kg(e.Mass_kg.Corners), false, false),
-        ("Whole core, net steel", Kg(e.Mass_kg.Total), true, false),
-        ("Sum over the plates", Kg(e.Geometry.Plates.Sum(p => p.Mass_kg)), false, false));
+        (e.Geometry.Units > 1 ? "All units, net steel" : "Whole core, net steel", Kg(e.Mass_kg.Total), true, false),
+        ("Sum over the plates", Kg(e.Geometry.Units * e.Geometry.Plates.Sum(p => p.Mass_kg)), false, false));
 
     public static Table Plates(EstimateResult e) => new(
         [

@@ -35,7 +35,7 @@ internal static class SummaryTables
         var rows = new Names(e.Derived);
         rows.Add("steel.grade", "Steel", $"{e.Steel.Grade}, {With(Plain(e.Steel.Thickness_mm), "mm")}");
         rows.Add("core.stackingFactor", "Stacking factor", Value(i.Core?.StackingFactor, ""));
-        rows.Add("core.form", "Core", Words.Form(e.Geometry.Form));
+        rows.Add("core.form", "Core", Words.Core(e.Geometry));
         rows.Add("joint.type", "Joint", Words.Joint(i.Joint));
         if (e.Joint.EffectiveGapUsed)
         {

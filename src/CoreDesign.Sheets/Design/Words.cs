@@ -10,9 +10,15 @@ internal static class Words
     public static string Form(string form) => form switch
     {
         "singlePhaseTwoLimb" => "two-limb",
+        "singlePhaseThreeLimb" => "single-phase three-limb",
+        "singlePhaseFourLimb" => "single-phase four-limb",
         "threeLimb" => "three-limb",
+        "fiveLimb" => "five-limb",
         _ => Spaced(form),
     };
+
+    /// <summary>The form, and of a bank how many there are.</summary>
+    public static string Core(GeometryResult g) => g.Units > 1 ? $"{Form(g.Form)}, {Figures.With(Figures.Plain(g.Units), "units")}" : Form(g.Form);
 
     public static string Joint(JointInput? joint) => joint?.Type switch
     {

@@ -13,7 +13,7 @@ public static class CoreDrawing
         ArgumentNullException.ThrowIfNull(r);
         ArgumentNullException.ThrowIfNull(o);
         var marks = new FrontView(r, reading, o.Checked()).Draw();
-        return new Scene(o.Width, o.Height, $"{FormName(r)} core, front view", Describe(r, reading), marks);
+        return new Scene(o.Width, o.Height, $"{FormName(r)} core, front view{(r.Geometry.Units > 1 ? $", one of {Figures.Plain(r.Geometry.Units)} units" : "")}", Describe(r, reading), marks);
     }
 
     /// <summary>Limb cross-section with circle, diameter and the table of steps beside it. <see cref="DrawingOptions.Scale"/> holds for the circle.</summary>
@@ -48,7 +48,7 @@ public static class CoreDrawing
         return new Scene(width, textSize + 27, "Scale of the reading", $"{Readings.Name(reading)} from {ticks.Label(ticks.Low)} to {Figures.With(ticks.Label(ticks.High), Readings.Unit(reading))}; darker is nearer the limit.", ScaleView.Draw(r, reading, o));
     }
 
-    internal static string FormName(EstimateResult r) => CoreZones.Limbs(r.Geometry) switch
+    internal static string FormName(EstimateResult r) => CoreRow.Of(r).Limbs.Count switch
     {
         2 => "Two-limb",
         3 => "Three-limb",
@@ -60,13 +60,16 @@ public static class CoreDrawing
     private static string Describe(EstimateResult r, Reading reading)
     {
         var g = r.Geometry;
-        var readings = CoreZones.Of(r).GroupBy(z => z.Kind)
-            .Select(k => (Name: FrontView.KindName(k.Key), Values: k.Select(z => z.Part is null ? null : Readings.Value(r, z.Part, reading)).OfType<double>().ToArray()))
+        var row = CoreRow.Of(r);
+        var readings = CoreZones.Of(r).GroupBy(z => z.Name, StringComparer.Ordinal)
+            .Select(k => (Name: k.Key, Values: k.Select(z => z.Part is null ? null : Readings.Value(r, z.Part, reading)).OfType<double>().ToArray()))
             .Where(k => k.Values.Length > 0)
             .Select(k => Plural(k.Name) + " " + Span(k.Values, reading));
         return $"{Readings.Name(reading)}: {string.Join(", ", readings)}. "
-            + $"Limb width {Mm(g.LimbWidth_mm)}, window {Mm(g.WindowHeight_mm)} high and {Mm(g.WindowWidth_mm)} wide, yoke height {Mm(g.YokeHeight_mm)}, "
-            + $"limb pitch {Mm(g.LimbPitch_mm)}, overall {Mm(g.OverallWidth_mm)} wide and {Mm(g.OverallHeight_mm)} high.";
+            + $"Limb width {Mm(g.LimbWidth_mm)}, {(row.Limbs[0].IsReturn ? $"return limb width {Mm(row.Limbs[0].Width_mm)}, " : "")}window {Mm(g.WindowHeight_mm)} high and {Mm(g.WindowWidth_mm)} wide, "
+            + $"{(g.ReturnWindowWidth_mm is { } beside ? $"beside a return limb {Mm(beside)} wide, " : "")}yoke height {Mm(g.YokeHeight_mm)}, "
+            + $"limb pitch {Mm(g.LimbPitch_mm)}, overall {Mm(g.OverallWidth_mm)} wide and {Mm(g.OverallHeight_mm)} high."
+            + (g.Units > 1 ? $" One of {Figures.Plain(g.Units)} units alike." : "");
     }
 
     private static string Plural(string kind) => kind.ToLowerInvariant().Replace("t zone", "T zone", StringComparison.Ordinal) + "s";

@@ -2,7 +2,7 @@ namespace CoreDesign.Sheets.Drawings;
 
 /// <summary>
 /// Size of the picture in the units of its painter (px on the page, pt on paper); text keeps its size whatever the core's is.
-/// Below 360 by 280 the front view leaves out dimensions and notes, which is the small pinned drawing.
+/// Below 30 by 23 texts (360 by 280 on the page) the front view leaves out dimensions and notes, which is the small pinned drawing.
 /// </summary>
 public sealed record DrawingOptions
 {
@@ -28,6 +28,8 @@ public sealed record DrawingOptions
 
     /// <summary>Typed dimensions in accent, as things that can be pressed; on paper they are plain.</summary>
     public bool Pressable { get; init; } = true;
+
+    internal bool HasRoom => Width >= 30 * DimensionSize && Height >= 280.0 / 12 * DimensionSize;
 
     internal DrawingOptions Checked()
     {

@@ -20,9 +20,9 @@ internal sealed class FrontPlan
     {
         (_r, _o, _callouts) = (r, o, callouts);
         _pen = new DimensionPen(o);
-        WithDimensions = o.Dimensions && o is { Width: >= 360, Height: >= 280 };
-        WithNotes = o.Notes && o is { Width: >= 360, Height: >= 280 };
-        Windows = CoreZones.Limbs(r.Geometry) - 1;
+        WithDimensions = o.Dimensions && o.HasRoom;
+        WithNotes = o.Notes && o.HasRoom;
+        Row = CoreRow.Of(r);
         Find();
     }
 
@@ -30,7 +30,7 @@ internal sealed class FrontPlan
 
     public bool WithNotes { get; }
 
-    public int Windows { get; }
+    public CoreRow Row { get; }
 
     public double Scale { get; private set; }
 
@@ -42,7 +42,8 @@ internal sealed class FrontPlan
 
     public DimensionText? InsideHeight { get; private set; }
 
-    public DimensionText? InsideWidth { get; private set; }
+    /// <summary>Widths across their windows, by the window's number from the left.</summary>
+    public List<(int Window, DimensionText Width)> InsideWidths { get; private set; } = [];
 
     public double CalloutX => Core.Right + 42;
 
@@ -88,7 +89,7 @@ internal sealed class FrontPlan
 
     private void Assign()
     {
-        (Rows, Columns, InsideHeight, InsideWidth) = ([], [], null, null);
+        (Rows, Columns, InsideHeight, InsideWidths) = ([], [], null, []);
         if (!WithDimensions)
         {
             return;
@@ -96,33 +97,43 @@ internal sealed class FrontPlan
 
         var g = _r.Geometry;
         var core = _r.Inputs.Core;
-        double w = g.LimbWidth_mm, ww = g.WindowWidth_mm, h = g.YokeHeight_mm, wh = g.WindowHeight_mm, s = Scale;
-        var last = Windows * g.LimbPitch_mm;
-        var stepsTyped = FieldState.Typed(_r, "core.limbSteps", core?.LimbSteps is { Count: > 0 });
-        var yokeTyped = FieldState.Typed(_r, "core.yoke.stepWidths_mm", core?.Yoke?.StepWidths_mm is { Count: > 0 });
-        var limbWidth = DimensionText.Of("Limb width", w, 0, w, stepsTyped ? "core.limbSteps" : null, stepsTyped);
-        var windowWidth = DimensionText.Of("Window width", ww, last - ww, last, "core.windowWidth_mm", FieldState.Typed(_r, "core.windowWidth_mm", core?.WindowWidth_mm is not null));
-        var pitch = DimensionText.Of("Limb pitch", g.LimbPitch_mm, last - g.LimbPitch_mm + (w / 2), last + (w / 2), "core.limbPitch_mm", FieldState.Typed(_r, "core.limbPitch_mm", core?.LimbPitch_mm is not null));
+        double h = g.YokeHeight_mm, wh = g.WindowHeight_mm, s = Scale;
+        bool Typed(string path, bool given) => FieldState.Typed(_r, path, given);
+        var limb = Row.Limbs[Row.FirstWound];
+        var main = Row.Windows[Row.MainWindow];
+        var (from, to) = (Row.Limbs[Row.MainWindow], Row.Limbs[Row.MainWindow + 1]);
+        var stepsTyped = Typed("core.limbSteps", core?.LimbSteps is { Count: > 0 });
+        var yokeTyped = Typed("core.yoke.stepWidths_mm", core?.Yoke?.StepWidths_mm is { Count: > 0 });
+        var limbWidth = DimensionText.Of("Limb width", limb.Width_mm, limb.X_mm, limb.Right_mm, stepsTyped ? "core.limbSteps" : null, stepsTyped);
+        var pitch = DimensionText.Of("Limb pitch", g.LimbPitch_mm, from.Axis_mm, to.Axis_mm, "core.limbPitch_mm", Typed("core.limbPitch_mm", core?.LimbPitch_mm is not null));
         var overallWidth = DimensionText.Of("Overall width", g.OverallWidth_mm, 0, g.OverallWidth_mm, null, false);
         var yokeHeight = DimensionText.Of("Yoke height", h, 0, h, yokeTyped ? "core.yoke.stepWidths_mm" : "core.yoke.areaFactor", yokeTyped);
-        var windowHeight = DimensionText.Of("Window height", wh, h, h + wh, "core.windowHeight_mm", FieldState.Typed(_r, "core.windowHeight_mm", core?.WindowHeight_mm is not null));
+        var windowHeight = DimensionText.Of("Window height", wh, h, h + wh, "core.windowHeight_mm", Typed("core.windowHeight_mm", core?.WindowHeight_mm is not null));
         var overallHeight = DimensionText.Of("Overall height", g.OverallHeight_mm, 0, g.OverallHeight_mm, null, false);
 
-        // Width across the window, height in another one, so that no dimension line crosses another.
-        if (_pen.Fits(windowWidth, (ww * s) - 8) && wh * s >= 5 * _o.DimensionSize)
+        // The return limb follows from a factor of the wound limb's width.
+        var returnLimb = Row.Limbs[0] is { IsReturn: true } first ? DimensionText.Of("Return limb width", first.Width_mm, first.X_mm, first.Right_mm, "core.returnLimb.areaFactor", false) : null;
+        List<(int Window, DimensionText Width)> widths = [(Row.MainWindow, DimensionText.Of("Window width", main.Width_mm, main.X_mm, main.Right_mm, "core.windowWidth_mm", Typed("core.windowWidth_mm", core?.WindowWidth_mm is not null)))];
+        if (Row.Windows[^1] is { IsReturn: true } beside)
         {
-            InsideWidth = windowWidth;
+            widths.Add((Row.Windows.Count - 1, DimensionText.Of("Return window width", beside.Width_mm, beside.X_mm, beside.Right_mm, "core.returnWindowWidth_mm", Typed("core.returnWindowWidth_mm", core?.ReturnWindowWidth_mm is not null))));
         }
 
-        if (Windows > 1 && ww * s >= 3 * _o.DimensionSize && _pen.Fits(windowHeight, (wh * s) - 8))
+        // Widths across their windows, height in another one, so that no dimension line crosses another.
+        var high = wh * s >= 5 * _o.DimensionSize;
+        InsideWidths = [.. widths.Where(d => high && _pen.Fits(d.Width, ((d.Width.To_mm - d.Width.From_mm) * s) - 8))];
+        if (Row.Windows.Count > 1 && Row.Windows[0].Width_mm * s >= 3 * _o.DimensionSize && _pen.Fits(windowHeight, (wh * s) - 8))
         {
             InsideHeight = windowHeight;
         }
 
         // Of two limbs both centre lines carry the pitch; its extension lines must not run through the text of the limb's width.
-        DimensionText[] window = InsideWidth is null ? [windowWidth] : [];
-        DimensionText[] row = Windows == 1 && _pen.Fits(limbWidth, w * s) ? [pitch, limbWidth, .. window, overallWidth] : [limbWidth, .. window, pitch, overallWidth];
+        DimensionText[] window = [.. widths.Except(InsideWidths).Select(d => d.Width)];
+        DimensionText[] row = Row.Windows.Count == 1 && _pen.Fits(limbWidth, limb.Width_mm * s)
+            ? [pitch, limbWidth, .. window, overallWidth]
+            : [.. returnLimb is null ? [] : new[] { returnLimb }, limbWidth, .. window, pitch, overallWidth];
         Stack(Rows, row, d => (d.To_mm - d.From_mm) * s);
+        Part();
         Stack(Columns, [yokeHeight, .. InsideHeight is null ? new[] { windowHeight } : [], overallHeight], d => (d.To_mm - d.From_mm) * s);
     }
 
@@ -139,6 +150,20 @@ internal sealed class FrontPlan
             else
             {
                 rows.Add([d]);
+            }
+        }
+    }
+
+    // A text that extension lines further out drive from its span has a row to itself as well.
+    private void Part()
+    {
+        for (var i = 0; i < Rows.Count; i++)
+        {
+            if (Rows[i].Count > 1 && Rows[i].Find(d => RowText(d, i).Outside is not null) is { } driven)
+            {
+                Rows[i].Remove(driven);
+                Rows.Insert(i + 1, [driven]);
+                i = -1;
             }
         }
     }

@@ -40,11 +40,25 @@ internal sealed class FrontView
             var bottom = ScaleBar();
             Cut();
             DetailCircle();
-            _marks.AddRange(Callouts.Place(_callouts, _plan.CalloutX, 4, bottom, _o, _taken));
+            _marks.AddRange(Callouts.Place(_callouts, _plan.CalloutX, 4 + Units(), bottom, _o, _taken));
         }
 
         return _marks;
     }
+
+    /// <summary>Says of a bank that there are more of what is drawn; gives the height that it takes from the notes.</summary>
+    private double Units()
+    {
+        if (_r.Geometry.Units == 1)
+        {
+            return 0;
+        }
+
+        _marks.Add(new TextMark(new(_plan.CalloutX, 4 + (_o.TextSize * 0.85)), UnitsNote(), _o.TextSize, Anchor.Start, Ink.Ink, Bold: true) { Part = "un" });
+        return _o.TextSize + 7;
+    }
+
+    private string UnitsNote() => $"{Figures.Plain(_r.Geometry.Units)} units";
 
     private void Parts()
     {
@@ -64,10 +78,9 @@ internal sealed class FrontView
     {
         var g = _r.Geometry;
         _marks.Add(Lines.Rectangle(_plan.Core, Paint.None, Ink.Ink, 1.4) with { Part = "ol" });
-        for (var i = 0; i < _plan.Windows; i++)
+        foreach (var window in _plan.Row.Windows)
         {
-            var window = _plan.Place(new((i * g.LimbPitch_mm) + g.LimbWidth_mm, g.YokeHeight_mm, g.LimbPitch_mm - g.LimbWidth_mm, g.WindowHeight_mm));
-            _marks.Add(Lines.Rectangle(window, Paint.None, Ink.Ink, 1.4) with { Part = "ol" });
+            _marks.Add(Lines.Rectangle(_plan.Place(new(window.X_mm, g.YokeHeight_mm, window.Width_mm, g.WindowHeight_mm)), Paint.None, Ink.Ink, 1.4) with { Part = "ol" });
         }
     }
 
@@ -77,7 +90,7 @@ internal sealed class FrontView
         foreach (var limb in _zones.Where(z => z.Kind == ZoneKind.Limb))
         {
             var x = _plan.Place(limb.Place_mm).Centre.X;
-            var text = new TextMark(new(x, _plan.Core.Y - 13), CoreZones.Mark(_r, limb.Limb), size, Anchor.Middle, Ink.Ink, Bold: true) { Part = "ph" };
+            var text = new TextMark(new(x, _plan.Core.Y - 13), _plan.Row.Limbs[limb.Limb].Letter, size, Anchor.Middle, Ink.Ink, Bold: true) { Part = "ph" };
             if (new Box(0, 0, _o.Width, _o.Height).Holds(TextExtent.Of(text)) && Take(TextExtent.Of(text).Grown(1)))
             {
                 _marks.Add(Lines.Line(new(x, _plan.Core.Y - 10), new(x, _plan.Core.Y - 2.5), Ink.Ink3));
@@ -108,11 +121,11 @@ internal sealed class FrontView
         }
 
         // One of a kind is enough outside: the rightmost of the upper row.
-        foreach (var zone in homeless.Where(z => z.Top || z.Kind == ZoneKind.Limb).GroupBy(z => z.Kind).Select(k => k.MaxBy(z => z.Place_mm.X)!))
+        foreach (var zone in homeless.Where(z => z.Top || z.Kind == ZoneKind.Limb).GroupBy(z => z.Name, StringComparer.Ordinal).Select(k => k.MaxBy(z => z.Place_mm.X)!))
         {
             var p = _plan.Place(zone.Place_mm);
             var at = zone.Kind == ZoneKind.Corner ? new XY(p.X + (p.Width * 0.7), p.Y + (p.Height * 0.7)) : p.Centre;
-            _callouts.Add(new([KindName(zone.Kind), Says(zone)[(KindName(zone.Kind).Length + 1)..]], at, Dot: true));
+            _callouts.Add(new([zone.Name, Says(zone)[(zone.Name.Length + 1)..]], at, Dot: true));
         }
     }
 
@@ -129,13 +142,15 @@ internal sealed class FrontView
             // Right of the middle, so that line and text together stand in the middle of the window.
             var x = ((limbs[0].Right + limbs[1].X) / 2) + (_o.DimensionSize * 0.4);
             Add(_pen.Vertical(height, limbs[0].Y, limbs[0].Bottom, x, null));
+            _taken.Add(new Box(x - 3, limbs[0].Y, 6, limbs[0].Height));
         }
 
-        if (_plan.InsideWidth is { } width)
+        foreach (var (window, width) in _plan.InsideWidths)
         {
             var y = limbs[0].Centre.Y + (_o.DimensionSize * 0.4);
-            Add(_pen.Horizontal(width, limbs[^2].Right, limbs[^1].X, y, null));
-            _taken.Add(new Box(limbs[^2].Right, y - 3, limbs[^1].X - limbs[^2].Right, 6));
+            var (left, right) = (limbs[window].Right, limbs[window + 1].X);
+            Add(_pen.Horizontal(width, left, right, y, null));
+            _taken.Add(new Box(left, y - 3, right - left, 6));
         }
 
         for (var row = 0; row < _plan.Rows.Count; row++)
@@ -173,15 +188,18 @@ internal sealed class FrontView
 
     private void Cut()
     {
-        var limb = _plan.Place(_zones.Last(z => z.Kind == ZoneKind.Limb).Place_mm);
-        double y = limb.Y + (0.76 * limb.Height), size = _o.DimensionSize, window = _r.Geometry.WindowWidth_mm * _plan.Scale;
+        var row = _plan.Row;
+        var at = row.Roomiest;
+        var limb = _plan.Place(_zones.Single(z => z.Kind == ZoneKind.Limb && z.Limb == at).Place_mm);
+        double y = limb.Y + (0.76 * limb.Height), size = _o.DimensionSize, reach = 15 + (0.75 * size);
+        var window = _plan.Scale * row.RoomBeside_mm(at);
         Box[] needs =
         [
             new Box(limb.X, y - 1, limb.Width, 2).Grown(2),
-            new(limb.X - 26, y - size - 8, 24, size + 22),
-            new(limb.Right + 2, y - size - 8, 24, size + 22),
+            new(limb.X - reach - 2, y - size - 8, reach, size + 22),
+            new(limb.Right + 2, y - size - 8, reach, size + 22),
         ];
-        if (limb.Height * 0.24 >= 16 && limb.Width >= 16 && window >= 34 && needs.All(IsFree))
+        if (limb.Height * 0.24 >= 16 && limb.Width >= 16 && window >= reach + 5 && needs.All(IsFree))
         {
             _taken.AddRange(needs);
             _marks.Add(FrontNotes.Cut(limb, y, size));
@@ -192,20 +210,29 @@ internal sealed class FrontView
     {
         var corner = _plan.Place(_zones.Last(z => z.Kind == ZoneKind.Corner && z.Top).Place_mm);
         var reach = Math.Min(corner.Width, corner.Height);
-        var at = _joints.Mitred ? new XY(corner.X + (0.72 * reach), corner.Bottom - (0.72 * reach)) : new XY(corner.X + (0.82 * corner.Width), corner.Bottom);
-        var radius = Math.Clamp(0.25 * reach, 5, 15);
+
+        // On the joint line, where it is farthest from the figure of the corner.
+        var places = new[] { 0.72, 0.5, 0.35, 0.85 }.Select(t => _joints.Mitred
+            ? new XY(corner.X + (t * reach), corner.Bottom - (t * reach))
+            : new XY(corner.X + ((t + 0.1) * corner.Width), corner.Bottom));
+        if (places.Select(at => (At: at, Radius: FreeRadius(at, Math.Clamp(0.25 * reach, 5, 15)))).FirstOrDefault(c => c.Radius >= 4) is not { Radius: > 0 } circle)
+        {
+            return;
+        }
+
+        var (at, radius) = circle;
+        _marks.Add(new CircleMark(at, radius, Paint.None, _o.Pressable ? Ink.Accent : Ink.Black, 1.25) { Part = "zc", Label = "Detail Z, the joint" });
+        _callouts.Add(new(JointNote(), new XY(at.X + (radius * 0.95), at.Y - (radius * 0.3)), Dot: false));
+    }
+
+    private double FreeRadius(XY at, double radius)
+    {
         while (radius >= 4 && !IsFree(new Box(at.X - radius, at.Y - radius, 2 * radius, 2 * radius).Grown(2)))
         {
             radius -= 1;
         }
 
-        if (radius < 4)
-        {
-            return;
-        }
-
-        _marks.Add(new CircleMark(at, radius, Paint.None, _o.Pressable ? Ink.Accent : Ink.Black, 1.25) { Part = "zc", Label = "Detail Z, the joint" });
-        _callouts.Add(new(JointNote(), new XY(at.X + (radius * 0.95), at.Y - (radius * 0.3)), Dot: false));
+        return radius;
     }
 
     private string[] JointNote() => _r.Joint.EffectiveGapUsed
@@ -214,7 +241,7 @@ internal sealed class FrontView
 
     private double CalloutWidth()
     {
-        var widest = _zones.Where(z => Value(z) is not null).Select(z => new Callout([KindName(z.Kind), Says(z)[(KindName(z.Kind).Length + 1)..]], default, true).Width(_o));
+        var widest = _zones.Where(z => Value(z) is not null).Select(z => new Callout([z.Name, Says(z)[(z.Name.Length + 1)..]], default, true).Width(_o));
         return widest.Append(new Callout(JointNote(), default, false).Width(_o)).Append(TextExtent.Width("5 000\u00A0mm", _o.TextSize) + 44).Max() + 2;
     }
 
@@ -239,7 +266,5 @@ internal sealed class FrontView
 
     private double? Value(Zone zone) => zone.Part is null ? null : Readings.Value(_r, zone.Part, _reading);
 
-    private string Says(Zone zone) => Value(zone) is { } v ? $"{KindName(zone.Kind)} {Figures.With(Readings.Figure(v, _reading), Readings.Unit(_reading))}" : KindName(zone.Kind);
-
-    internal static string KindName(ZoneKind kind) => kind switch { ZoneKind.Limb => "Limb", ZoneKind.Yoke => "Yoke", ZoneKind.Corner => "Corner", _ => "T zone" };
+    private string Says(Zone zone) => Value(zone) is { } v ? $"{zone.Name} {Figures.With(Readings.Figure(v, _reading), Readings.Unit(_reading))}" : zone.Name;
 }

@@ -46,7 +46,9 @@ internal sealed class SectionView(EstimateResult r, Reading reading, DrawingOpti
     private void Circle(XY centre, double diameter)
     {
         var scale = diameter / r.Geometry.CircleDiameter_mm;
-        var limb = r.Parts.FirstOrDefault(p => p.Kind == "limb");
+        var row = CoreRow.Of(r);
+        var limbs = r.Parts.Where(p => p.Kind == "limb").ToArray();
+        var limb = Array.Find(limbs, p => p.Name == "limb" + row.Limbs[row.FirstWound].Letter) ?? limbs.FirstOrDefault();
         var value = limb is null ? null : Readings.Value(r, limb, reading);
         double? place = value is { } v ? Readings.Span(r, reading).Place(v) : null;
         Paint fill = place is { } t ? Paint.OnRamp(t) : Ink.Sunk;

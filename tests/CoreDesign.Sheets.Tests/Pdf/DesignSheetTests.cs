@@ -1,5 +1,6 @@
 using CoreDesign.Sheets.Design;
 using CoreDesign.Sheets.Pdf;
+using CoreDesign.Sheets.Tests.Drawings;
 using UglyToad.PdfPig;
 using UglyToad.PdfPig.DocumentLayoutAnalysis.TextExtractor;
 
@@ -64,6 +65,42 @@ public class DesignSheetTests
             .. e.Geometry.Plates.Select(p => Figures.Fixed(p.LongSide_mm, 1)),
         ];
         Assert.All(wanted, w => Assert.Contains(Plain(w), text, StringComparison.Ordinal));
+    }
+
+    public static TheoryData<string, string, int> EveryForm => Forms.Every();
+
+    [Theory]
+    [MemberData(nameof(EveryForm))]
+    public void Every_form_has_its_dimensions_on_the_first_page_and_its_lengths_in_the_tables(string form, string joint, int units)
+    {
+        var study = Forms.Study(form, joint, units);
+        var g = study.Estimate.Geometry;
+        foreach (var paper in new[] { PaperSize.A4, PaperSize.Letter })
+        {
+            using var pdf = Open(SheetRequests.Of(study, paper));
+            var first = Text(pdf, 1);
+            Assert.Contains($"({Plain(Figures.Plain(g.OverallWidth_mm, 2))})", first, StringComparison.Ordinal);
+            Assert.Contains($"({Plain(Figures.Plain(g.LimbPitch_mm, 2))})", first, StringComparison.Ordinal);
+            Assert.Contains(Plain(Figures.Plain(g.WindowWidth_mm, 2)), first, StringComparison.Ordinal);
+            Assert.Equal(units > 1, first.Contains($"{units} units", StringComparison.Ordinal));
+            var text = Text(pdf);
+            Assert.Contains(Plain($"{Figures.Plain(g.OverallWidth_mm, 1)} × {Figures.Plain(g.OverallHeight_mm, 1)} mm"), text, StringComparison.Ordinal);
+            Assert.Equal(g.Limbs.Any(l => l.IsReturn), text.Contains("Return limb, width; net area", StringComparison.Ordinal));
+            Assert.Equal(g.ReturnWindowWidth_mm is not null, text.Contains("Window beside a return limb", StringComparison.Ordinal));
+            Assert.Equal(units > 1, text.Contains("Plates of one unit", StringComparison.Ordinal));
+            Assert.All(g.Limbs, l => Assert.Contains("Limb " + l.Name["limb".Length..], text, StringComparison.Ordinal));
+        }
+    }
+
+    [Fact]
+    public void Masses_of_a_bank_are_those_of_all_its_units()
+    {
+        var e = Forms.Of("singlePhaseThreeLimb", units: 3);
+        using var pdf = Open(SheetRequests.Of(Forms.Study("singlePhaseThreeLimb", units: 3)));
+
+        // Whole mass and the sum over the plates are the same figure, found in two ways.
+        var total = Plain(Figures.With(Figures.Fixed(e.Mass_kg.Total, 1), "kg"));
+        Assert.Equal(2, Text(pdf).Split(total).Length - 1);
     }
 
     [Fact]

@@ -39,7 +39,7 @@ public sealed class EvidenceView
             [
                 EvidenceCharts.FluxOverPeriod(estimate, options),
                 EvidenceCharts.CurrentOverPeriod(estimate, options),
-                .. estimate.Limbs.Count > 0 ? [EvidenceCharts.Loop(estimate, 0, options)] : Array.Empty<Chart>(),
+                .. estimate.Limbs.Count > 0 ? [EvidenceCharts.Loop(estimate, EvidenceCharts.FirstWoundLimb(estimate), options)] : Array.Empty<Chart>(),
                 HarmonicsChart.Of(estimate, options),
             ];
         }

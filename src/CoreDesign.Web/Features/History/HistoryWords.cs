@@ -24,7 +24,10 @@ public static class HistoryWords
     public static string Form(string form) => form switch
     {
         "threeLimb" => "three-phase, three limbs",
+        "fiveLimb" => "three-phase, five limbs",
         "singlePhaseTwoLimb" => "single-phase, two limbs",
+        "singlePhaseThreeLimb" => "single-phase, three limbs",
+        "singlePhaseFourLimb" => "single-phase, four limbs",
         _ => form,
     };
 
