@@ -7,7 +7,6 @@ namespace CoreDesign.History;
 public static class HistoryText
 {
     public const int LongestTitle = 200;
-    public const int LongestReference = 100;
     public const int LongestNote = 4000;
     public const int LongestAuthor = 100;
 
@@ -16,10 +15,6 @@ public static class HistoryText
         string.IsNullOrWhiteSpace(title)
             ? new FieldError(path, "The title is empty. Give the design a name, the order's number for instance.")
             : Check(title, path, "title", LongestTitle, severalLines: false);
-
-    /// <summary>The order's reference may be left out.</summary>
-    public static FieldError? CheckReference(string? reference, string path = "order.reference") =>
-        Check(reference ?? "", path, "reference", LongestReference, severalLines: false);
 
     /// <summary>A note may be empty and may have several lines.</summary>
     public static FieldError? CheckNote(string? note, string path = "note") =>
@@ -37,12 +32,8 @@ public static class HistoryText
     {
         if (text.Length > longest)
             return new FieldError(path, string.Create(CultureInfo.InvariantCulture, $"The {what} has {text.Length} characters; at most {longest} are kept. Shorten it."));
-        foreach (var c in text)
-        {
-            if (char.IsControl(c) && !(severalLines && (c is '\n' or '\r' or '\t')))
-                return new FieldError(path, string.Create(CultureInfo.InvariantCulture, $"The {what} holds the control character U+{(int)c:X4}. Take it out."));
-        }
-
-        return null;
+        return PlainText.Is(text, severalLines)
+            ? null
+            : new FieldError(path, string.Create(CultureInfo.InvariantCulture, $"The {what} holds control or invisible characters. Type it again as plain text, at most {longest} characters."));
     }
 }

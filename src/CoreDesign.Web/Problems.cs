@@ -1,4 +1,5 @@
 using CoreDesign.Estimating.Contracts;
+using CoreDesign.Web.Platform;
 using Microsoft.AspNetCore.Diagnostics;
 using Microsoft.AspNetCore.Http.HttpResults;
 using Microsoft.AspNetCore.Http.Metadata;
@@ -84,6 +85,7 @@ public static class Problems
             {
                 api.UseExceptionHandler(failed => failed.Run(context => Failure(context).ExecuteAsync(context)));
                 api.UseStatusCodePages();
+                api.UseApiMethods();
             });
     }
 

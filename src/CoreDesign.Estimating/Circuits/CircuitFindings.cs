@@ -1,6 +1,5 @@
 using System.Globalization;
 using CoreDesign.Estimating.Contracts;
-using CoreDesign.Estimating.Steels.Checks;
 
 namespace CoreDesign.Estimating.Circuits;
 
@@ -29,7 +28,7 @@ internal sealed class CircuitFindings
 
     public void Plain(string path, string name)
     {
-        if (!NameRules.IsPlain(name))
+        if (!PlainText.Is(name))
         {
             Say(path, "The name holds control or invisible characters. Type it again as plain text.");
         }

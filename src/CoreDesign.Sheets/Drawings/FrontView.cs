@@ -6,6 +6,9 @@ namespace CoreDesign.Sheets.Drawings;
 /// <summary>Draws the front view after its plan, from the parts up to the notes; what is optional yields to what already stands.</summary>
 internal sealed class FrontView
 {
+    // Along the joint line of a corner from the window outward; the first is the rule, the others where a figure stands in its way.
+    private static readonly double[] DetailPlaces = [0.72, 0.5, 0.35, 0.85];
+
     private readonly EstimateResult _r;
     private readonly Reading _reading;
     private readonly DrawingOptions _o;
@@ -211,8 +214,7 @@ internal sealed class FrontView
         var corner = _plan.Place(_zones.Last(z => z.Kind == ZoneKind.Corner && z.Top).Place_mm);
         var reach = Math.Min(corner.Width, corner.Height);
 
-        // On the joint line, where it is farthest from the figure of the corner.
-        var places = new[] { 0.72, 0.5, 0.35, 0.85 }.Select(t => _joints.Mitred
+        var places = DetailPlaces.Select(t => _joints.Mitred
             ? new XY(corner.X + (t * reach), corner.Bottom - (t * reach))
             : new XY(corner.X + ((t + 0.1) * corner.Width), corner.Bottom));
         if (places.Select(at => (At: at, Radius: FreeRadius(at, Math.Clamp(0.25 * reach, 5, 15)))).FirstOrDefault(c => c.Radius >= 4) is not { Radius: > 0 } circle)

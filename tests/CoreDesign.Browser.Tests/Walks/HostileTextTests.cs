@@ -66,7 +66,7 @@ public sealed class HostileTextTests(Site site) : BrowserTest(site)
         var design = DemoOrders.All[0].Design;
         (string Title, string Says)[] cases =
         [
-            ("a\0b", "holds the control character U+0000. Take it out."),
+            ("a\0b", "holds control or invisible characters. Type it again as plain text, at most 200 characters."),
             (new string('t', 201), "has 201 characters; at most 200 are kept. Shorten it."),
             (" ", "is empty"),
         ];

@@ -114,5 +114,25 @@ public sealed class OpenApiTests(Service service) : IClassFixture<Service>
         Assert.Contains("/openapi/v1.json", problem.GetProperty("detail").GetString(), StringComparison.Ordinal);
     }
 
+    [Theory]
+    [InlineData("GET", "/api/estimates", "POST")]
+    [InlineData("GET", "/api/studies", "POST")]
+    [InlineData("GET", "/api/circuits", "POST")]
+    [InlineData("HEAD", "/api/circuits", "POST")]
+    [InlineData("GET", "/api/designs/1/copies", "POST")]
+    [InlineData("GET", "/api/designs/1/revisions/1/notes", "POST")]
+    [InlineData("DELETE", "/api/estimates", "POST")]
+    [InlineData("DELETE", "/api/designs/1", "GET, PUT")]
+    [InlineData("POST", "/api/steels/M105-30P", "GET")]
+    public async Task Method_that_an_address_does_not_take_is_answered_by_those_it_takes(string method, string address, string allowed)
+    {
+        using var request = new HttpRequestMessage(new HttpMethod(method), address);
+
+        var answer = await _client.SendAsync(request, Cancel);
+
+        Assert.Equal(HttpStatusCode.MethodNotAllowed, answer.StatusCode);
+        Assert.Equal(allowed, string.Join(", ", answer.Content.Headers.Allow.Order(StringComparer.Ordinal)));
+    }
+
     private Task<JsonElement> DocumentAsync() => _client.GetAsync("/openapi/v1.json", HttpStatusCode.OK);
 }

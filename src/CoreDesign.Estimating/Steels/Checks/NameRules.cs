@@ -1,5 +1,4 @@
-using System.Globalization;
-using System.Text;
+using CoreDesign.Estimating.Contracts;
 
 namespace CoreDesign.Estimating.Steels.Checks;
 
@@ -25,10 +24,5 @@ internal static class NameRules
         }
     }
 
-    /// <summary>False where a text holds what can't be seen or printed: control characters, marks of writing direction, halves of pairs.</summary>
-    public static bool IsPlain(string text) => !text.EnumerateRunes().Any(Forbidden);
-
-    private static bool Forbidden(Rune rune) => rune == Rune.ReplacementChar || Rune.GetUnicodeCategory(rune) is
-        UnicodeCategory.Control or UnicodeCategory.Format or UnicodeCategory.LineSeparator or UnicodeCategory.ParagraphSeparator
-        or UnicodeCategory.PrivateUse or UnicodeCategory.OtherNotAssigned;
+    public static bool IsPlain(string text) => PlainText.Is(text);
 }

@@ -78,7 +78,6 @@ internal static class DesignSaves
     {
         var errors = new List<FieldError>();
         if (HistoryText.CheckTitle(title) is { } badTitle) errors.Add(badTitle);
-        if (HistoryText.CheckReference(request.Design?.Order?.Reference, "design.order.reference") is { } badReference) errors.Add(badReference);
         if (HistoryText.CheckNote(request.Note) is { } badNote) errors.Add(badNote);
         if (request.Design is null) errors.Add(new FieldError("design", "The design is missing. Send the body of an estimate here."));
         return errors.Count == 0 ? null : Problems.Refused(errors);
