@@ -63,13 +63,15 @@ public static class SizingAid
 
         if (wantedFluxDensity_T is { } wanted && limb is not null && TurnsFor(design, wanted, limb) is { } turns)
         {
-            proposal = proposal with { Turns = turns, FluxDensityWithTurns_T = Sizing.FluxDensity(voltage, turns, frequency, limb.NetArea_m2) };
+            proposal = proposal with { Turns = turns, FluxDensityWithTurns_T = Sizing.FluxDensity(voltage, turns * Tap(design), frequency, limb.NetArea_m2) };
         }
 
-        if (design.ExcitedWinding?.Turns is not { } typed)
+        if (design.ExcitedWinding?.Turns is not { } given)
         {
             return proposal;
         }
+
+        var typed = given * Tap(design);
 
         proposal = proposal with
         {
@@ -110,9 +112,12 @@ public static class SizingAid
             return null;
         }
 
-        var exact = Sizing.FluxDensity(voltage, 1, frequency, limb.NetArea_m2) / wanted;
+        var exact = Sizing.FluxDensity(voltage, Tap(design), frequency, limb.NetArea_m2) / wanted;
         return exact is > 0 and < 1e7 ? Math.Max(1, (int)Math.Round(exact, MidpointRounding.AwayFromZero)) : null;
     }
+
+    /// <summary>Turns in circuit over the turns given; a tap beyond any range is left for the estimate to refuse.</summary>
+    private static double Tap(DesignInput design) => design.ExcitedWinding?.Tap_percent is { } tap and > -100 and < 1000 ? 1 + (tap / 100) : 1;
 
     /// <summary>Voltage across the winding of one limb: over √3 in star; a single-phase core carries half of its turns on each limb, the whole winding counts.</summary>
     private static double? LimbVoltage_V(DesignInput design) => (design.ExcitedWinding?.LineVoltage_V, design.ExcitedWinding?.Connection) switch

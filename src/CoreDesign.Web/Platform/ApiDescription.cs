@@ -63,6 +63,10 @@ internal static class ApiDescription
         [typeof(LimbInput)] = "core.limb.",
         [typeof(StepInput)] = "core.limbSteps[].",
         [typeof(YokeInput)] = "core.yoke.",
+        [typeof(ReturnLimbInput)] = "core.returnLimb.",
+        [typeof(OtherWindingInput)] = "otherWinding.",
+        [typeof(TertiaryInput)] = "tertiary.",
+        [typeof(CapacitanceInput)] = "capacitance.",
         [typeof(JointInput)] = "joint.",
         [typeof(ModelInput)] = "model.",
     };

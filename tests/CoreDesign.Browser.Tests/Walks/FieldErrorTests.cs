@@ -12,15 +12,42 @@ public sealed class FieldErrorTests(Site site) : BrowserTest(site)
 
     private const string NoNumber = "twelve";
 
+    /// <summary>Fields of other core forms and connections than the demo order's.</summary>
+    private static readonly string[] OfSinglePhase = ["core.units", "core.woundLimbs"];
+
+    private static readonly string[] OfFiveLimbs = ["core.returnLimb.areaFactor", "core.returnWindowWidth_mm", "model.zeroSequenceReactance_pu"];
+
     [Fact]
     public async Task Every_field_says_what_is_wrong_keeps_the_last_figures_and_takes_the_mend()
     {
         var visitor = await ComeAsync();
         var page = visitor.Page;
-        await visitor.OpenDemoAsync();
+        await visitor.OpenDemoAsync("town-400");
         await page.GetByRole(AriaRole.Button, new() { Name = "…" }).ClickAsync();
         await page.EditAsync(() => page.GetByRole(AriaRole.Button, new() { Name = "Type the steps by hand" }).ClickAsync());
-        foreach (var field in FieldCatalog.All.Where(f => f.Path != Chosen))
+        await page.GetByRole(AriaRole.Button, new() { Name = "Taps and other windings" }).ClickAsync();
+        await page.EditAsync(() => page.Field("tertiary.connection").SelectOptionAsync("D"));
+        await page.EditAsync(() => page.Field("otherWinding.connection").SelectOptionAsync("D"));
+        await page.EditAsync(() => page.Field("otherWinding.lineVoltage_V").FillAsync("20000"));
+        await page.EditAsync(() => page.Field("capacitance.phase_nF").FillAsync("4"));
+        await TryEveryFieldAsync(page, FieldCatalog.All.Where(f => f.Path != Chosen && !OfSinglePhase.Contains(f.Path) && !OfFiveLimbs.Contains(f.Path)));
+    }
+
+    [Fact]
+    public async Task Fields_of_other_core_forms_say_what_is_wrong_too()
+    {
+        var visitor = await ComeAsync();
+        var page = visitor.Page;
+        await visitor.OpenDemoAsync();
+        await page.EditAsync(() => page.Field("core.form").SelectOptionAsync("fiveLimb"));
+        await TryEveryFieldAsync(page, OfFiveLimbs.Select(FieldCatalog.Find));
+        await page.EditAsync(() => page.Field("core.form").SelectOptionAsync("singlePhaseTwoLimb"));
+        await TryEveryFieldAsync(page, OfSinglePhase.Select(FieldCatalog.Find));
+    }
+
+    private static async Task TryEveryFieldAsync(IPage page, IEnumerable<Field> fields)
+    {
+        foreach (var field in fields)
         {
             var input = await InputOfAsync(page, field);
             var typed = await input.InputValueAsync();

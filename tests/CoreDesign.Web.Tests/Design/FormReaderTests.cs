@@ -40,6 +40,16 @@ public sealed class FormReaderTests
     {
         Assert.Equal(3, FormReader.Design(DesignText.Empty.With(FormPaths.Form, "threeLimb")).Order!.Phases);
         Assert.Equal(1, FormReader.Design(DesignText.Empty.With(FormPaths.Form, "singlePhaseTwoLimb")).Order!.Phases);
+        Assert.Equal(3, FormReader.Design(DesignText.Empty.With(FormPaths.Form, "fiveLimb")).Order!.Phases);
+        Assert.Equal(3, FormReader.Design(DesignText.Empty.With(FormPaths.Form, "singlePhaseThreeLimb").With(FormPaths.Units, "3")).Order!.Phases);
+    }
+
+    [Fact]
+    public void Closed_delta_without_a_word_stays_a_closed_delta()
+    {
+        var texts = FormReader.Texts(new DesignInput { Tertiary = new TertiaryInput() });
+        Assert.Equal("D", texts[FormPaths.Tertiary]);
+        Assert.NotNull(FormReader.Design(texts).Tertiary);
     }
 
     [Fact]

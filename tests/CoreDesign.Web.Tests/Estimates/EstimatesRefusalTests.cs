@@ -80,7 +80,7 @@ public sealed class EstimatesRefusalTests(Service service) : IClassFixture<Servi
     [InlineData("$type", "\"System.IO.FileInfo\"", "$type", "Known members")]
     [InlineData("__proto__", "{}", "__proto__", "Known members")]
     [InlineData("core.limb", """{ "diameter_mm": 220, "steps": 7 }""", "core.limb", "not both")]
-    [InlineData("core.form", "\"fiveLimb\"", "core.form", "threeLimb or singlePhaseTwoLimb")]
+    [InlineData("core.form", "\"sevenLimb\"", "core.form", "threeLimb, fiveLimb, singlePhaseTwoLimb, singlePhaseThreeLimb or singlePhaseFourLimb")]
     [InlineData("order.phases", "2", "order.phases", "Give 1 or 3")]
     [InlineData("order.phases", "1", "order.phases", "does not fit the core form")]
     [InlineData("excitedWinding.connection", "\"single\"", "excitedWinding.connection", "Give YN, Y or D")]

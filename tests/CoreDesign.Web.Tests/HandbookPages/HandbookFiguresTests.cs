@@ -39,6 +39,19 @@ public sealed class HandbookFiguresTests
     }
 
     [Fact]
+    public void Defaults_of_other_core_forms_are_the_programs()
+    {
+        var table = HandbookText.Table("order", "What other core forms take");
+        Assert.Equal(4, table.Count);
+        foreach (var row in table)
+        {
+            var core = Estimate(row[1], "stepLap").Inputs.Core!;
+            var window = core.ReturnWindowWidth_mm is null ? "" : core.ReturnWindowWidth_mm == core.WindowWidth_mm / 2 ? "W/2" : "other";
+            Assert.Equal(string.Join(" | ", row[2..]), string.Join(" | ", Said($"{core.Yoke!.AreaFactor}"), Said($"{core.ReturnLimb?.AreaFactor}"), window, Said($"{core.WoundLimbs}")));
+        }
+    }
+
+    [Fact]
     public void Stacking_factor_left_open_is_the_least_of_the_grade() =>
         Assert.Equal(SteelLibrary.Catalog.All.Single(s => s.Name == "M90-23P").MinimumStackingFactor!.Value, Estimate("threeLimb", "stepLap").Inputs.Core!.StackingFactor);
 
@@ -46,7 +59,7 @@ public sealed class HandbookFiguresTests
     public void Default_building_factors_are_the_programs()
     {
         var table = HandbookText.Table("building-factor", "Defaults");
-        string[] forms = ["threeLimb", "singlePhaseTwoLimb"];
+        string[] forms = ["threeLimb", "fiveLimb", "singlePhaseTwoLimb", "singlePhaseThreeLimb"];
         Assert.Equal(forms.Length, table.Count);
         for (var f = 0; f < forms.Length; f++)
         {

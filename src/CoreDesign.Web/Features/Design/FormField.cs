@@ -35,6 +35,9 @@ public sealed record FormField(string Path, FieldKind Kind = FieldKind.Number)
 
     public IReadOnlyList<FormChoice> Choices { get; init; } = [];
 
+    /// <summary>What an open choice means where that is an answer of its own; null where it is a default or still to be chosen.</summary>
+    public string? None { get; init; }
+
     /// <summary>What the arrow keys add; null where the field has no natural step.</summary>
     public double? Step { get; init; }
 }
@@ -42,4 +45,8 @@ public sealed record FormField(string Path, FieldKind Kind = FieldKind.Number)
 public sealed record FormChoice(string Value, string Label);
 
 /// <summary>A group of lines under one heading.</summary>
-public sealed record FormSection(string Key, string Title, IReadOnlyList<FormField> Fields);
+public sealed record FormSection(string Key, string Title, IReadOnlyList<FormField> Fields)
+{
+    /// <summary>True for lines that few designs need: closed until something is typed in one of them.</summary>
+    public bool Folded { get; init; }
+}

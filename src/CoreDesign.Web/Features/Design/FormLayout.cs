@@ -11,6 +11,8 @@ public static class FormLayout
     private static readonly Field WantedFluxDensityField = new(FormPaths.WantedFluxDensity, "Flux density goal", "B", "T", 0.1, 2,
         "below the saturation of grain-oriented steel", "Peak flux density in the limb at rated voltage; turns and diameter are proposed for it");
 
+    private static readonly FormChoice[] ConnectionChoices = [new("YN", "YN"), new("Y", "Y"), new("D", "D"), new("single", "single-phase")];
+
     public static IReadOnlyList<FormSection> Sections { get; } =
     [
         new("order", "Order",
@@ -19,8 +21,13 @@ public static class FormLayout
             new(FormPaths.Form, FieldKind.Choice)
             {
                 Label = "Core",
-                Choices = [new("threeLimb", "3-phase, 3 limbs"), new("singlePhaseTwoLimb", "1-phase, 2 limbs")],
+                Choices =
+                [
+                    new("threeLimb", "3-phase, 3 limbs"), new("fiveLimb", "3-phase, 5 limbs"),
+                    new("singlePhaseTwoLimb", "1-phase, 2 limbs"), new("singlePhaseThreeLimb", "1-phase, 3 limbs"), new("singlePhaseFourLimb", "1-phase, 4 limbs"),
+                ],
             },
+            new(FormPaths.Units) { Label = "Units", Derivable = true },
             new("order.ratedPower_kVA"),
             new(FormPaths.Voltages, FieldKind.NumberList) { Label = "Rated voltages" },
             new("order.highestVoltage_percent") { Derivable = true, Step = 1 },
@@ -38,12 +45,15 @@ public static class FormLayout
             new(FormPaths.Diameter) { Derivable = true, Step = 1 },
             new(FormPaths.StepCount) { Derivable = true, Step = 1 },
             new(FormPaths.StockWidths, FieldKind.NumberList) { Label = "Stock widths" },
+            new(FormPaths.WoundLimbs) { Derivable = true },
+            new(FormPaths.ReturnLimbFactor) { Label = "Return limb factor", Derivable = true, Step = 0.01 },
         ]),
         new("window", "Window and yokes",
         [
             new(FormPaths.WindowHeight) { Step = 1 },
             new(FormPaths.WindowWidth) { Derivable = true, Step = 1 },
             new(FormPaths.LimbPitch) { Derivable = true, Step = 1 },
+            new(FormPaths.ReturnWindowWidth) { Label = "Return window", Derivable = true, Step = 1 },
             new(FormPaths.YokeFactor) { Derivable = true, Step = 0.01 },
             new(FormPaths.YokeHeight) { Derivable = true, Own = YokeHeightField, Step = 1 },
         ]),
@@ -67,15 +77,29 @@ public static class FormLayout
             {
                 Label = "Connection",
                 Derivable = true,
-                Choices = [new("YN", "YN"), new("Y", "Y"), new("D", "D"), new("single", "single-phase")],
+                Choices = ConnectionChoices,
             },
             new(FormPaths.LineVoltage),
             new(FormPaths.Turns) { Derivable = true, Step = 1 },
             new(FormPaths.WantedFluxDensity) { Own = WantedFluxDensityField, Step = 0.01 },
             new("excitedWinding.resistance_ohm") { Derivable = true },
         ]),
+        new("windings", "Taps and other windings",
+        [
+            new("excitedWinding.tap_percent") { Step = 0.5 },
+            new(FormPaths.Tertiary, FieldKind.Choice) { Label = "Tertiary", Choices = [new("D", "closed delta")], None = "none" },
+            new("tertiary.turns") { Derivable = true, Step = 1 },
+            new("tertiary.resistance_ohm") { Derivable = true },
+            new(FormPaths.OtherConnection, FieldKind.Choice) { Label = "Other winding", Choices = ConnectionChoices, None = "none" },
+            new("otherWinding.lineVoltage_V") { Label = "Other voltage" },
+            new("otherWinding.turns") { Label = "Other turns", Derivable = true, Step = 1 },
+            new("otherWinding.tap_percent") { Label = "Other tap", Step = 0.5 },
+            new("capacitance.phase_nF"),
+            new("capacitance.lineVoltage_kV") { Label = "Its line voltage", Derivable = true },
+        ]) { Folded = true },
         new("model", "Model",
         [
+            new(FormPaths.ZeroSequence) { Label = "Zero sequence", Derivable = true, Step = 0.1 },
             new("model.buildingFactor") { Derivable = true, Step = 0.01 },
             new("model.temperature_C") { Derivable = true, Step = 5 },
         ]),
@@ -87,7 +111,7 @@ public static class FormLayout
     /// <summary>The line of a path, or a plain number line for a cell of the step table.</summary>
     public static FormField Find(string path) => ByPath.GetValueOrDefault(path) ?? new FormField(path);
 
-    /// <summary>Connections that the form of core takes.</summary>
-    public static IReadOnlyList<FormChoice> Connections(string form) =>
-        [.. Find(FormPaths.Connection).Choices.Where(c => c.Value == "single" == form.StartsWith("singlePhase", StringComparison.Ordinal))];
+    /// <summary>Connections that the core takes.</summary>
+    public static IReadOnlyList<FormChoice> Connections(DesignText texts) =>
+        [.. ConnectionChoices.Where(c => c.Value == "single" == FormFit.IsSinglePhase(texts))];
 }

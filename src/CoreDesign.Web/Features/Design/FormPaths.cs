@@ -8,6 +8,13 @@ public static class FormPaths
     public const string Voltages = "order.ratedVoltages_kV";
     public const string Grade = "steel.grade";
     public const string Form = "core.form";
+    public const string Units = "core.units";
+    public const string WoundLimbs = "core.woundLimbs";
+    public const string ReturnLimbFactor = "core.returnLimb.areaFactor";
+    public const string ReturnWindowWidth = "core.returnWindowWidth_mm";
+    public const string ZeroSequence = "model.zeroSequenceReactance_pu";
+    public const string Tertiary = "tertiary.connection";
+    public const string OtherConnection = "otherWinding.connection";
     public const string Diameter = "core.limb.diameter_mm";
     public const string StepCount = "core.limb.steps";
     public const string StockWidths = "core.limb.stockWidths_mm";

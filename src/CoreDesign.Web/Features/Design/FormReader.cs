@@ -56,10 +56,9 @@ public static partial class FormReader
             }
         }
 
-        var form = texts[FormPaths.Form];
-        if (form.Length > 0)
+        if (FormFit.Phases(texts) is { } phases)
         {
-            values.Add(new(FormPaths.Phases, form.StartsWith("singlePhase", StringComparison.Ordinal) ? 1.0 : 3.0));
+            values.Add(new(FormPaths.Phases, phases));
         }
 
         return DesignPaths.Build(values);
@@ -82,7 +81,8 @@ public static partial class FormReader
             };
         }
 
-        return texts;
+        // A closed delta may be there without a word; on the form the word is what says so.
+        return design.Tertiary is { Connection: null } ? texts.With(FormPaths.Tertiary, "D") : texts;
     }
 
     /// <summary>True for a text that can be taken for its field.</summary>

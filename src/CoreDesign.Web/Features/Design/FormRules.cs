@@ -10,7 +10,8 @@ public static partial class FormRules
     {
         // What is half typed displaces nothing: the other field answers until this one can.
         texts = Pin(texts, path, geometry);
-        return (FormReader.IsValue(path, text) ? Displace(texts, path, text) : texts).With(path, text);
+        texts = (FormReader.IsValue(path, text) ? Displace(texts, path) : texts).With(path, text);
+        return path is FormPaths.Form or FormPaths.Units ? MatchCore(texts) : texts;
     }
 
     /// <summary>Takes the derived step set as the start of one's own; the circle waits until the steps are released.</summary>
@@ -103,23 +104,28 @@ public static partial class FormRules
         return texts;
     }
 
-    private static DesignText Displace(DesignText texts, string path, string text) => path switch
+    private static DesignText Displace(DesignText texts, string path) => path switch
     {
         FormPaths.WindowWidth => texts.Without(FormPaths.LimbPitch),
         FormPaths.LimbPitch => texts.Without(FormPaths.WindowWidth),
         FormPaths.YokeFactor => texts.Without(FormPaths.YokeHeight).Without(FormPaths.YokeWidths),
         FormPaths.YokeHeight => texts.Without(FormPaths.YokeFactor).Without(FormPaths.YokeWidths),
         FormPaths.Diameter or FormPaths.StepCount or FormPaths.StockWidths when texts.HasItems(FormPaths.LimbSteps) => ReleaseSteps(texts, null),
-        FormPaths.Form => MatchConnection(texts, text),
         FormPaths.JointType => texts.Without("joint.positions"),
         _ => texts,
     };
 
-    private static DesignText MatchConnection(DesignText texts, string form)
+    /// <summary>Takes the connections to those of the core that is now chosen, and out what it has no place for.</summary>
+    private static DesignText MatchCore(DesignText texts)
     {
-        var allowed = FormLayout.Connections(form);
-        var typed = texts[FormPaths.Connection];
-        return typed.Length == 0 || allowed.Any(c => c.Value == typed) ? texts : texts.With(FormPaths.Connection, allowed[0].Value);
+        texts = FormFit.Keep(texts);
+        var allowed = FormLayout.Connections(texts);
+        foreach (var path in new[] { FormPaths.Connection, FormPaths.OtherConnection })
+        {
+            texts = texts[path].Length == 0 || allowed.Any(c => c.Value == texts[path]) ? texts : texts.With(path, allowed[0].Value);
+        }
+
+        return texts;
     }
 
     // A set that is typed is cut: tenths of a millimetre are what a works shears and stacks to (common practice, no source).
