@@ -9,7 +9,6 @@ internal static class Words
 {
     public static string Form(string form) => form switch
     {
-        "fiveLimb" => "five-limb",
         "singlePhaseTwoLimb" => "two-limb",
         "singlePhaseThreeLimb" => "single-phase three-limb",
         "singlePhaseFourLimb" => "single-phase four-limb",
