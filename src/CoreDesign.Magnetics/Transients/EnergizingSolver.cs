@@ -74,11 +74,9 @@ public static class EnergizingSolver
 
     private static void Keep(EnergizingSolution solution, int n, TransientInstant instant, double[] z)
     {
-        var windings = solution.WindingCurrent_A.Length;
-        var first = instant.Size - windings - (instant.HasStar ? 1 : 0);
-        for (var k = 0; k < windings; k++)
+        for (var k = 0; k < solution.WindingCurrent_A.Length; k++)
         {
-            solution.WindingCurrent_A[k][n] = z[first + k];
+            solution.WindingCurrent_A[k][n] = z[instant.FirstCurrent + k];
             solution.CoreLinkage_Wb[k][n] = instant.Linkage(k, z);
         }
     }
@@ -110,9 +108,7 @@ public static class EnergizingSolver
     private static double[] Voltage(Energizing e, WindingPhase phase, int steps, double h)
     {
         var supply = e.Circuit.Supply;
-        var star = supply.Connection is SupplyConnection.StarWithNeutral or SupplyConnection.StarIsolated;
-        var peak = phase == WindingPhase.Closed ? 0 : Math.Sqrt(star ? 2.0 / 3 : 2) * supply.Voltage_V;
-        var angle = e.Angle_rad - (phase switch { WindingPhase.B => 2, WindingPhase.C => 4, _ => 0 } * Math.PI / 3);
+        double peak = WindingVoltage.Peak_V(supply, phase), angle = e.Angle_rad - WindingVoltage.Lag_rad(phase);
         return [.. Enumerable.Range(0, steps + 1).Select(n => peak * Math.Sin((2 * Math.PI * supply.Frequency_Hz * n * h) + angle))];
     }
 

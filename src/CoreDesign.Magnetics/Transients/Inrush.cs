@@ -43,8 +43,7 @@ public static class Inrush
     public static double PeakLinkage_Wb(Supply supply)
     {
         ArgumentNullException.ThrowIfNull(supply);
-        var star = supply.Connection is SupplyConnection.StarWithNeutral or SupplyConnection.StarIsolated;
-        return Math.Sqrt(star ? 2.0 / 3 : 2) * supply.Voltage_V / (2 * Math.PI * supply.Frequency_Hz);
+        return WindingVoltage.Peak_V(supply, WindingPhase.A) / (2 * Math.PI * supply.Frequency_Hz);
     }
 
     /// <summary>What the saturated steel under the coils of a winding adds to its inductance, limb by limb.</summary>

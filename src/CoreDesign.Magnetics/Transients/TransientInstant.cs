@@ -35,8 +35,8 @@ internal sealed class TransientInstant
 
     public int Size { get; }
 
-    /// <summary>True where the last unknown is the neutral of an isolated star.</summary>
-    public bool HasStar => _star;
+    /// <summary>Place of the first winding's current among the unknowns.</summary>
+    public int FirstCurrent => _m;
 
     /// <summary>MMF drop of each branch at the instant solved last.</summary>
     public IReadOnlyList<double> Mmf_A => _mmf;
