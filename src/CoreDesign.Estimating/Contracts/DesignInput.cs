@@ -18,6 +18,7 @@ public sealed record DesignInput
     public CoreInput? Core { get; init; }
     public JointInput? Joint { get; init; }
     public ModelInput? Model { get; init; }
+    public MarginsInput? Margins { get; init; }
 }
 
 /// <summary>What the customer asks for.</summary>
@@ -31,6 +32,9 @@ public sealed record OrderInput
     /// <summary>Rated line voltages of the windings in kV, highest first; for the title only. The excited winding counts.</summary>
     public IReadOnlyList<double>? RatedVoltages_kV { get; init; }
     public double? HighestVoltage_percent { get; init; }
+
+    /// <summary>Lowest frequency at which the highest voltage can last; the rated one where it is left open.</summary>
+    public double? LowestFrequency_Hz { get; init; }
     public double? AskedNoLoadLoss_W { get; init; }
     public double? AskedNoLoadCurrent_percent { get; init; }
 }

@@ -118,6 +118,9 @@ public sealed record MarginResult
     public required double AtRated_percent { get; init; }
     public required double AtHighest_percent { get; init; }
 
+    /// <summary>Frequency of the figures at highest voltage; null in results kept from before it was asked for, which stand for the rated one.</summary>
+    public double? LowestFrequency_Hz { get; init; }
+
     /// <summary>The part with the highest peak flux density, and that value at rated and at highest voltage.</summary>
     public required string WorstPart { get; init; }
     public required double PeakAtRated_T { get; init; }

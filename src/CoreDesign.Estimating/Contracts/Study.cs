@@ -8,6 +8,9 @@ public sealed record Study
     public required EstimateResult Estimate { get; init; }
     public required IReadOnlyList<VoltagePointResult> VoltageCurve { get; init; }
     public required IReadOnlyList<LeverResult> Levers { get; init; }
+
+    /// <summary>Null in studies kept from before there were margins.</summary>
+    public MarginsResult? Margins { get; init; }
 }
 
 /// <summary>One solved point of loss and current against voltage.</summary>

@@ -1,6 +1,7 @@
 using System.Globalization;
 using CoreDesign.Estimating.Contracts;
 using CoreDesign.Estimating.Fields;
+using CoreDesign.Estimating.Margins;
 using CoreDesign.Estimating.Steels;
 using CoreDesign.Estimating.Steels.Checks;
 using CoreDesign.Magnetics.Circuits;
@@ -33,6 +34,8 @@ internal sealed class DesignResolver(DesignInput input, SteelCatalog steels)
         var rated = Needed("order.ratedPower_kVA", order.RatedPower_kVA);
         var frequency = Needed("order.frequency_Hz", order.Frequency_Hz);
         var highest = Optional("order.highestVoltage_percent", order.HighestVoltage_percent, DesignDefaults.HighestVoltage_percent);
+        var margins = new MarginsReader(this);
+        var lowest = margins.LowestFrequency(order, frequency);
         Limit("order.askedNoLoadLoss_W", order.AskedNoLoadLoss_W);
         Limit("order.askedNoLoadCurrent_percent", order.AskedNoLoadCurrent_percent);
         CheckTexts(order);
@@ -41,6 +44,7 @@ internal sealed class DesignResolver(DesignInput input, SteelCatalog steels)
         var (other, filledOther) = windings.Other(input.OtherWinding, excited, winding.Turns);
         var (tertiary, filledTertiary) = windings.Tertiary(input.Tertiary, connection, winding.Turns);
         var (capacitance, filledCapacitance) = windings.Capacitance(input.Capacitance, order, connection);
+        var asked = margins.Read(input.Margins, excited?.Resistance_ohm ?? double.NaN);
         var steel = Steel();
         var (joint, effectiveGap, filledJoint) = new JointReader(this).Read(input.Joint);
         var (geometry, filledCore) = new CoreReader(this).Read(core, form, steel, joint?.Kind ?? JointKind.StepLap);
@@ -61,7 +65,7 @@ internal sealed class DesignResolver(DesignInput input, SteelCatalog steels)
         {
             Inputs = new DesignInput
             {
-                Order = order with { Phases = excited.Supply.Connection == SupplyConnection.Single ? 1 : 3, HighestVoltage_percent = highest },
+                Order = order with { Phases = excited.Supply.Connection == SupplyConnection.Single ? 1 : 3, HighestVoltage_percent = highest, LowestFrequency_Hz = lowest },
                 ExcitedWinding = filledExcited,
                 OtherWinding = filledOther,
                 Tertiary = filledTertiary,
@@ -70,6 +74,7 @@ internal sealed class DesignResolver(DesignInput input, SteelCatalog steels)
                 Core = filledCore with { Units = core.Units is null && units == 1 ? null : units, WoundLimbs = woundLimbs },
                 Joint = filledJoint,
                 Model = (input.Model ?? new()) with { BuildingFactor = building.Value, Temperature_C = temperature, ZeroSequenceReactance_pu = zeroSequence },
+                Margins = margins.WithAirCore(asked, geometry, excited.Turns, woundLimbs ?? 1),
             },
             Derived = _derived,
             Warnings = _warnings,
@@ -86,6 +91,7 @@ internal sealed class DesignResolver(DesignInput input, SteelCatalog steels)
             ZeroSequenceReactance_pu = zeroSequence ?? DesignDefaults.ZeroSequenceReactance_pu,
             RatedPower_VA = rated * 1000,
             HighestVoltage_percent = highest,
+            LowestFrequency_Hz = lowest,
             BuildingFactor = building,
             Temperature_C = temperature,
         };

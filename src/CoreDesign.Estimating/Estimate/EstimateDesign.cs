@@ -13,7 +13,7 @@ public static class EstimateDesign
         Prepare<EstimateResult>(design, steels, core => EstimateShape.Of(core, cancel));
 
     /// <summary>The highest flux density for which steel data are taken (see the rules of the import); no law here knows anything beyond.</summary>
-    private const double Highest_T = 3;
+    internal const double Highest_T = 3;
 
     /// <summary>Checks the design, prepares the core and runs <paramref name="solve"/> on it; every refusal becomes part of the outcome.</summary>
     internal static Outcome<T> Prepare<T>(DesignInput design, SteelCatalog steels, Func<CoreAtWork, T> solve)
@@ -54,12 +54,18 @@ public static class EstimateDesign
         }
     }
 
-    /// <summary>What the voltage demands of the limbs, B = U/(sqrt2 pi f N A), where it is beyond any law; else null.</summary>
+    /// <summary>Why the design is beyond any law at rated or at highest voltage; else null.</summary>
     private static string? FarAboveSaturation(ResolvedDesign design)
     {
-        var B = design.Excited.PhaseVoltage_V / (Math.Sqrt(2) * Math.PI * design.Supply.Frequency_Hz * design.Turns * design.Geometry.NetLimbArea_m2);
-        return B <= Highest_T ? null : string.Create(
-            CultureInfo.InvariantCulture,
-            $"The limbs would have to carry {B:0.0#} T; the steel saturates at {design.Steel.SaturationPolarization_T.Value} T, and no figure is given beyond {Highest_T} T. Take more turns, a larger limb or a lower voltage.");
+        var extreme = design.LimbFluxDensity_T(design.HighestVoltage_percent, design.LowestFrequency_Hz);
+        if (design.LimbFluxDensity_T(100, design.Supply.Frequency_Hz) is var rated && rated > Highest_T)
+        {
+            return Text($"The limbs would have to carry {rated:0.0#} T; the steel saturates at {design.Steel.SaturationPolarization_T.Value} T, and no figure is given beyond {Highest_T} T. Take more turns, a larger limb or a lower voltage.");
+        }
+
+        return extreme <= Highest_T ? null : Text(
+            $"At {design.HighestVoltage_percent} % voltage and {design.LowestFrequency_Hz} Hz the limbs would have to carry {extreme:0.0#} T; the steel saturates at {design.Steel.SaturationPolarization_T.Value} T, and no figure is given beyond {Highest_T} T. Take a lower highest voltage, a higher lowest frequency, more turns or a larger limb.");
     }
+
+    private static string Text(FormattableString text) => text.ToString(CultureInfo.InvariantCulture);
 }

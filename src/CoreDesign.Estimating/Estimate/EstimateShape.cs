@@ -12,13 +12,13 @@ namespace CoreDesign.Estimating.Estimate;
 internal static class EstimateShape
 {
     public const string MarginDefinition =
-        "Saturation polarization at core temperature less the highest peak flux density of any part, over saturation polarization; per cent.";
+        "Saturation polarization at core temperature less the highest peak flux density of any part, over saturation polarization; per cent. At highest voltage it is told at the lowest frequency, where the core must carry most flux.";
 
     public static EstimateResult Of(CoreAtWork core, CancellationToken cancel)
     {
         var design = core.Design;
         var atRated = core.SolveAt(100, cancel);
-        var atHighest = core.SolveAt(design.HighestVoltage_percent, cancel);
+        var atHighest = core.SolveAt(design.HighestVoltage_percent, design.LowestFrequency_Hz, cancel);
         var solution = atRated.Solution;
         var lines = CoreLines.Of(design, atRated, design.Excited);
         var current = lines.Average(l => Waveform.Rms(l.Current_A));
@@ -97,6 +97,7 @@ internal static class EstimateShape
         {
             AtRated_percent = 100 * (js - rated) / js,
             AtHighest_percent = 100 * (js - highest) / js,
+            LowestFrequency_Hz = core.Design.LowestFrequency_Hz,
             WorstPart = part,
             PeakAtRated_T = rated,
             PeakAtHighest_T = highest,

@@ -31,7 +31,7 @@ internal static class EstimateWarnings
 
         if (highest >= core.Sheet.SaturationPolarization_T)
         {
-            yield return new NoteResult("saturation", Text($"At {core.Design.HighestVoltage_percent} % voltage the core would be saturated: {highest:0.000} T against a saturation polarization of {core.Sheet.SaturationPolarization_T:0.000} T."));
+            yield return new NoteResult("saturation", Text($"At {core.Design.HighestVoltage_percent} % voltage{AtLowest(core.Design)} the core would be saturated: {highest:0.000} T against a saturation polarization of {core.Sheet.SaturationPolarization_T:0.000} T."));
         }
 
         if (rated < LowLimb_T)
@@ -54,6 +54,9 @@ internal static class EstimateWarnings
             yield return new NoteResult("effectiveGap", Text($"The works' effective gap of {1000 * core.Design.EffectiveGap_m} mm replaces the joint model."));
         }
     }
+
+    private static string AtLowest(ResolvedDesign design) =>
+        design.LowestFrequency_Hz < design.Supply.Frequency_Hz ? Text($" and {design.LowestFrequency_Hz} Hz") : "";
 
     private static string Text(FormattableString text) => text.ToString(CultureInfo.InvariantCulture);
 }

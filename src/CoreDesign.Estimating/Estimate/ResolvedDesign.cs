@@ -30,12 +30,17 @@ internal sealed record ResolvedDesign
     public required double ZeroSequenceReactance_pu { get; init; }
     public required double RatedPower_VA { get; init; }
     public required double HighestVoltage_percent { get; init; }
+    public required double LowestFrequency_Hz { get; init; }
     public required BuildingFactorValue BuildingFactor { get; init; }
     public required double Temperature_C { get; init; }
 
     public Supply Supply => Excited.Supply;
 
     public double Turns => Excited.Turns;
+
+    /// <summary>What a voltage and frequency demand of the limbs, B = U/(sqrt2 pi f N A), without resistance.</summary>
+    public double LimbFluxDensity_T(double voltage_percent, double frequency_Hz) =>
+        Excited.PhaseVoltage_V * voltage_percent / 100 / (Math.Sqrt(2) * Math.PI * frequency_Hz * Turns * Geometry.NetLimbArea_m2);
 
     public int Phases => Supply.Connection == SupplyConnection.Single ? 1 : 3;
 

@@ -1,9 +1,10 @@
 using CoreDesign.Estimating.Contracts;
+using CoreDesign.Estimating.Margins;
 using CoreDesign.Estimating.Steels;
 
 namespace CoreDesign.Estimating.Estimate;
 
-/// <summary>Use case: a design in, the whole study out: estimate, voltage curve and levers. What a revision stores.</summary>
+/// <summary>Use case: a design in, the whole study out: estimate, voltage curve, levers and margins. What a revision stores.</summary>
 public static class StudyDesign
 {
     public static Outcome<Study> Run(DesignInput design, SteelCatalog steels, CancellationToken cancel = default) =>
@@ -15,6 +16,7 @@ public static class StudyDesign
                 Estimate = estimate,
                 VoltageCurve = VoltageSweep.Of(core, cancel),
                 Levers = Levers.Solve(design, estimate, steels, cancel),
+                Margins = StudyMargins.Of(core, cancel),
             };
         });
 }

@@ -10,6 +10,7 @@ public static class FieldCatalog
         new("order.frequency_Hz", "Frequency", "f", "Hz", 10, 400, "loss curves are given at power frequencies", "Rated frequency"),
         new("order.ratedVoltages_kV[]", "Rated voltage", "U", "kV", 0.01, 1200, "rated line voltages", "Rated line voltages, highest first; for the title"),
         new("order.highestVoltage_percent", "Highest voltage", "U", "%", 100, 130, "continuous over-excitation at no load", "Highest continuous voltage in per cent of rated"),
+        new("order.lowestFrequency_Hz", "Lowest frequency", "f", "Hz", 10, 400, "loss curves are given at power frequencies", "Lowest frequency at which the highest voltage can last; at most the rated one"),
         new("order.askedNoLoadLoss_W", "Asked-for loss", "P", "W", 0.1, 5_000_000, "a limit for the whole core", "Limit for the no-load loss"),
         new("order.askedNoLoadCurrent_percent", "Asked-for current", "I", "%", 0.001, 100, "per cent of rated current", "Limit for the no-load current"),
         new("excitedWinding.lineVoltage_V", "Line voltage", "U", "V", 10, 1_200_000, "rms, line to line for three phases", "Rated line voltage of the excited winding"),
@@ -47,6 +48,13 @@ public static class FieldCatalog
         new("model.buildingFactor", "Building factor", "k", "", 1, 2, "core loss over sheet loss", "Core W/kg over sheet W/kg at the same flux density"),
         new("model.zeroSequenceReactance_pu", "Zero-sequence reactance", "x", "p.u.", 0.05, 10, "through air and tank, over rated impedance", "Zero-sequence magnetizing reactance through air and tank over rated impedance"),
         new("model.temperature_C", "Core temperature", "θ", "°C", -20, 140, "steel temperature at which the figures hold", "Core temperature"),
+        new("margins.currentMultiple", "Current multiple", "n", "", 1.1, 100, "more than the current at rated voltage, less than saturation could ever draw", "The over-voltage is sought at which the no-load current is this many times that at rated voltage"),
+        new("margins.dcBias_A", "Direct current", "I", "A", 0, 1000, "stray direct current in a network is below it", "Direct current in each phase of the excited winding; 0 for none"),
+        new("margins.inrush.residual_percent", "Residual flux", "B", "%", 0, 100, "no core keeps more than its peak", "Flux left in the core, in per cent of its peak at rated voltage"),
+        new("margins.inrush.switchingAngle_deg", "Switching angle", "α", "°", 0, 360, "one period of the voltage", "Angle of the first phase's voltage when the switch closes; 0, at its zero, is the worst"),
+        new("margins.inrush.sourceInductance_mH", "Source inductance", "L", "mH", 0, 10_000, "from a stiff supply to a weak high-voltage line", "Inductance of the supply in each line, seen from the excited winding; 0 for a stiff supply"),
+        new("margins.inrush.airCoreInductance_mH", "Air-core inductance", "L", "mH", 0.00001, 1_000_000, "from one turn to the largest high-voltage winding", "Inductance of one phase of the excited winding with its limb saturated through"),
+        new("margins.inrush.resistance_ohm", "Resistance", "R", "ohm", 0, 1000, "winding and supply of one phase", "Winding and supply together, one phase; it wears the inrush off"),
     ];
 
     private static readonly Dictionary<string, Field> ByPath = All.ToDictionary(f => f.Path, StringComparer.Ordinal);

@@ -1,6 +1,7 @@
 using System.Globalization;
 using CoreDesign.Estimating.Contracts;
 using CoreDesign.Estimating.Estimate;
+using CoreDesign.Magnetics.Geometry;
 
 namespace CoreDesign.Estimating.Margins;
 
@@ -18,6 +19,18 @@ internal sealed class MarginsReader(DesignResolver resolver)
         }
 
         return lowest;
+    }
+
+    /// <summary>The inputs with the air-core inductance that follows from the core where none is given.</summary>
+    public MarginsInput WithAirCore(MarginsInput read, CoreGeometry geometry, double turns)
+    {
+        if (read.Inrush!.AirCoreInductance_mH is not null)
+        {
+            return read;
+        }
+
+        resolver.Derive("margins.inrush.airCoreInductance_mH");
+        return read with { Inrush = read.Inrush with { AirCoreInductance_mH = 1000 * AirCoreOfDesign.Inductance_H(geometry, turns) } };
     }
 
     public MarginsInput Read(MarginsInput? given, double windingResistance_ohm)

@@ -31,7 +31,6 @@ public static class AirCore
         return new AirCoil(turns, geometry.CircleDiameter_m + (geometry.WindowWidth_m / 2), HeightShare * geometry.WindowHeight_m);
     }
 
-    /// <summary>What a limb's steel alone adds once it is saturated: mu0 N² A/l with the limb's net area and length.</summary>
-    public static double SteelInductance_H(double turns, double netArea_m2, double length_m) =>
-        MagneticConstants.Mu0_H_per_m * turns * turns * netArea_m2 / length_m;
+    /// <summary>Of an endless winding's reluctance and that of its ends, the ends' share: 0.45 D/(h + 0.45 D).</summary>
+    public static double EndShare(AirCoil coil) => 0.45 * coil.MeanDiameter_m / (coil.Height_m + (0.45 * coil.MeanDiameter_m));
 }

@@ -11,11 +11,8 @@ public sealed record Energizing
     public required MagneticCircuit Circuit { get; init; }
     public double Angle_rad { get; init; }
 
-    /// <summary>Linkage that the core's steel holds when the switch closes.</summary>
+    /// <summary>Linkage of each winding when the switch closes.</summary>
     public required IReadOnlyList<double> ResidualLinkage_Wb { get; init; }
-
-    /// <summary>Of the air inside each winding beside the steel: linked with the winding, not with the core.</summary>
-    public required IReadOnlyList<double> AirPathInductance_H { get; init; }
 
     /// <summary>In each line; a delta's windings see it through two lines.</summary>
     public double SourceInductance_H { get; init; }
@@ -32,12 +29,11 @@ public sealed record EnergizingSolution
     public required double[] Time_s { get; init; }
     public required double[][] WindingCurrent_A { get; init; }
 
-    /// <summary>Linkage of each winding with the core's branches; the air path's is not in it.</summary>
-    public required double[][] CoreLinkage_Wb { get; init; }
+    public required double[][] Linkage_Wb { get; init; }
 
     /// <summary>Voltage of the supply across each winding; an isolated star's is to the supply's neutral.</summary>
     public required double[][] Voltage_V { get; init; }
 
     /// <summary>Work done on the branches since closing: stored and turned to heat.</summary>
-    public required double[] CoreWork_J { get; init; }
+    public required double[] BranchWork_J { get; init; }
 }

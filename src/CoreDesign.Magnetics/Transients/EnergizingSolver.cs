@@ -17,9 +17,9 @@ public static class EnergizingSolver
         ArgumentNullException.ThrowIfNull(e);
         ArgumentOutOfRangeException.ThrowIfLessThan(e.StepsPerPeriod, 24);
         var windings = e.Circuit.Windings.Count;
-        if (e.ResidualLinkage_Wb.Count != windings || e.AirPathInductance_H.Count != windings || e.Resistance_ohm.Count != windings)
+        if (e.ResidualLinkage_Wb.Count != windings || e.Resistance_ohm.Count != windings)
         {
-            throw new CircuitException($"A transient of {windings} windings needs a residual linkage, an air path inductance and a resistance of each.");
+            throw new CircuitException($"A transient of {windings} windings needs a residual linkage and a resistance of each.");
         }
 
         var topology = CircuitTopology.Of(e.Circuit);
@@ -30,9 +30,9 @@ public static class EnergizingSolver
         {
             Time_s = [.. Enumerable.Range(0, steps + 1).Select(n => n * h)],
             WindingCurrent_A = Rows(windings, steps),
-            CoreLinkage_Wb = Rows(windings, steps),
+            Linkage_Wb = Rows(windings, steps),
             Voltage_V = [.. e.Circuit.Windings.Select(w => Voltage(e, w.Phase, steps, h))],
-            CoreWork_J = new double[steps + 1],
+            BranchWork_J = new double[steps + 1],
         };
         double[] z = new double[instant.Size], last = new double[instant.Size], before = new double[instant.Size], history = new double[instant.Size];
         var drive = e.ResidualLinkage_Wb.ToArray();
@@ -59,10 +59,10 @@ public static class EnergizingSolver
 
             instant.Solve(z, weight, history, drive, imposed: false);
             instant.Accept(z);
-            solution.CoreWork_J[n] = solution.CoreWork_J[n - 1];
+            solution.BranchWork_J[n] = solution.BranchWork_J[n - 1];
             for (var b = 0; b < mmf.Length; b++)
             {
-                solution.CoreWork_J[n] += 0.5 * (mmf[b] + instant.Mmf_A[b]) * (instant.BranchFlux(b, z) - instant.BranchFlux(b, last));
+                solution.BranchWork_J[n] += 0.5 * (mmf[b] + instant.Mmf_A[b]) * (instant.BranchFlux(b, z) - instant.BranchFlux(b, last));
                 mmf[b] = instant.Mmf_A[b];
             }
 
@@ -77,18 +77,17 @@ public static class EnergizingSolver
         for (var k = 0; k < solution.WindingCurrent_A.Length; k++)
         {
             solution.WindingCurrent_A[k][n] = z[instant.FirstCurrent + k];
-            solution.CoreLinkage_Wb[k][n] = instant.Linkage(k, z);
+            solution.Linkage_Wb[k][n] = instant.Linkage(k, z);
         }
     }
 
-    /// <summary>Air paths on the diagonal; the lines' inductance by the connection's rule.</summary>
+    /// <summary>The lines' inductance as the windings see it, by the connection's rule.</summary>
     private static double[,] Inductance(Energizing e)
     {
         var k = e.Circuit.Windings.Count;
         var l = new double[k, k];
         for (var i = 0; i < k; i++)
         {
-            l[i, i] = e.AirPathInductance_H[i];
             if (e.Circuit.Windings[i].Phase == WindingPhase.Closed)
             {
                 continue;

@@ -46,14 +46,6 @@ public static class Inrush
         return WindingVoltage.Peak_V(supply, WindingPhase.A) / (2 * Math.PI * supply.Frequency_Hz);
     }
 
-    /// <summary>What the saturated steel under the coils of a winding adds to its inductance, limb by limb.</summary>
-    public static double SteelInductance_H(MagneticCircuit circuit, Winding winding)
-    {
-        ArgumentNullException.ThrowIfNull(circuit);
-        ArgumentNullException.ThrowIfNull(winding);
-        return winding.Coils.Sum(c => circuit.Branches.First(b => b.Name == c.Branch) is { Length_m: > 0 } limb ? AirCore.SteelInductance_H(c.Turns, limb.Area_m2, limb.Length_m) : 0);
-    }
-
     /// <exception cref="NotConvergedException">An instant without a solution.</exception>
     public static InrushSolution Solve(Energizing e, CancellationToken cancel = default)
     {

@@ -7,7 +7,7 @@ public sealed class DesignJsonTests
 {
     [Theory]
     [InlineData("""{"core":{"windowHeigth_mm":520}}""", "core.windowHeigth_mm", "Did you mean 'windowHeight_mm'?")]
-    [InlineData("""{"colour":"red"}""", "colour", "Known members: order, excitedWinding, otherWinding, tertiary, capacitance, steel, core, joint, model.")]
+    [InlineData("""{"colour":"red"}""", "colour", "Known members: order, excitedWinding, otherWinding, tertiary, capacitance, steel, core, joint, model, margins.")]
     [InlineData("""{"core":{"windowHeight_mm":"520"}}""", "core.windowHeight_mm", "\"520\" is given where a JSON number is needed")]
     [InlineData("""{"core":{"windowHeight_mm":1e999}}""", "core.windowHeight_mm", "1e999 is too large")]
     [InlineData("""{"core":{"windowHeight_mm":[1]}}""", "core.windowHeight_mm", "A list is given")]

@@ -175,6 +175,14 @@ public class RefusalTests
             "joint.effectiveGap_mm" => d with { Joint = joint with { EffectiveGap_mm = value } },
             "model.buildingFactor" => d with { Model = new() { BuildingFactor = value } },
             "model.temperature_C" => d with { Model = new() { Temperature_C = value } },
+            "order.lowestFrequency_Hz" => d with { Order = order with { LowestFrequency_Hz = value } },
+            "margins.currentMultiple" => d with { Margins = new() { CurrentMultiple = value } },
+            "margins.dcBias_A" => d with { Margins = new() { DcBias_A = value } },
+            "margins.inrush.residual_percent" => d with { Margins = new() { Inrush = new() { Residual_percent = value } } },
+            "margins.inrush.switchingAngle_deg" => d with { Margins = new() { Inrush = new() { SwitchingAngle_deg = value } } },
+            "margins.inrush.sourceInductance_mH" => d with { Margins = new() { Inrush = new() { SourceInductance_mH = value } } },
+            "margins.inrush.airCoreInductance_mH" => d with { Margins = new() { Inrush = new() { AirCoreInductance_mH = value } } },
+            "margins.inrush.resistance_ohm" => d with { Margins = new() { Inrush = new() { Resistance_ohm = value } } },
             _ => throw new ArgumentOutOfRangeException(nameof(path), path, "A new field needs a line here."),
         };
     }

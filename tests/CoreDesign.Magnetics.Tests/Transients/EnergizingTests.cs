@@ -19,14 +19,11 @@ public sealed class EnergizingTests
     [InlineData(0.8, 330)]
     public void First_peak_of_an_ideal_core_without_resistance_is_that_of_the_integral(double residual, double angle_deg)
     {
-        // The flux goes to B_r + B_m (1 + cos a); beyond saturation the air alone takes it.
+        // The flux goes to B_r + B_m (1 + cos a); beyond saturation the current is the excess linkage over the inductance that is left.
         const double b = 1.7, air = 0.004;
         var most = b * (residual + 1 + Math.Cos(angle_deg * Math.PI / 180));
-        var beyond = Turns * Area_m2 * (most - Saturation_T) / SaturatedInductance_H;
-
-        // A series air path takes its share of the linkage: with total inductance L the current is the excess linkage over L.
-        var expected = beyond * SaturatedInductance_H / (SaturatedInductance_H + air);
-        var found = Inrush.Solve(Close(Ring(Ideal, b), residual, angle_deg, air_H: air), Cancel);
+        var expected = Turns * Area_m2 * (most - Saturation_T) / (SaturatedInductance_H + air);
+        var found = Inrush.Solve(Close(WithAir(Ring(Ideal, b), air), residual, angle_deg), Cancel);
         Assert.Equal(expected, found.Peak_A, 1e-3 * expected);
         Assert.InRange(found.HalvingChange, 0, 1e-3);
 
@@ -86,14 +83,14 @@ public sealed class EnergizingTests
     [InlineData(SupplyConnection.Delta)]
     public void Flux_and_energy_are_accounted_for_at_every_instant(SupplyConnection connection)
     {
-        const double r = 0.5, air = 0.002;
-        var circuit = ThreePhase(Lossy, connection, 1.7);
-        var e = Close(circuit, 0.7, 0, resistance: r, air_H: air) with { StepsPerPeriod = 2880 };
+        const double r = 0.5, source = 0.002;
+        var circuit = AirPaths.Add(ThreePhase(Lossy, connection, 1.7), [0.008, 0.008, 0.008], 0.3);
+        var e = Close(circuit, 0.7, 0, source_H: connection == SupplyConnection.Delta ? 0 : source, resistance: r) with { StepsPerPeriod = 2880 };
         var s = EnergizingSolver.Solve(e, Cancel);
         double supplied = 0, lost = 0, linked = 0;
         var h = s.Time_s[1];
         var scale = Inrush.PeakLinkage_Wb(circuit.Supply);
-        double Stored(int n) => Enumerable.Range(0, 3).Sum(k => 0.5 * air * s.WindingCurrent_A[k][n] * s.WindingCurrent_A[k][n]);
+        double Stored(int n) => Enumerable.Range(0, 3).Sum(k => 0.5 * e.SourceInductance_H * s.WindingCurrent_A[k][n] * s.WindingCurrent_A[k][n]);
         for (var n = 1; n < s.Time_s.Length; n++)
         {
             var sum = 0.0;
@@ -109,14 +106,14 @@ public sealed class EnergizingTests
             linked += 0.5 * h * (s.Voltage_V[0][n - 1] + s.Voltage_V[0][n] - (r * (s.WindingCurrent_A[0][n - 1] + s.WindingCurrent_A[0][n])));
             if (connection != SupplyConnection.StarIsolated)
             {
-                Assert.Equal(linked, s.CoreLinkage_Wb[0][n] - s.CoreLinkage_Wb[0][0] + (air * (s.WindingCurrent_A[0][n] - s.WindingCurrent_A[0][0])), 1e-3 * scale);
+                Assert.Equal(linked, s.Linkage_Wb[0][n] - s.Linkage_Wb[0][0] + (e.SourceInductance_H * (s.WindingCurrent_A[0][n] - s.WindingCurrent_A[0][0])), 1e-3 * scale);
             }
             else
             {
                 Assert.Equal(0, sum, 1e-6);
             }
 
-            Assert.Equal(supplied, lost + s.CoreWork_J[n] + Stored(n) - Stored(0), 2e-3 * (lost + s.CoreWork_J[^1]));
+            Assert.Equal(supplied, lost + s.BranchWork_J[n] + Stored(n) - Stored(0), 2e-3 * (lost + s.BranchWork_J[^1]));
         }
     }
 
@@ -133,7 +130,7 @@ public sealed class EnergizingTests
     [InlineData(SupplyConnection.Delta)]
     public void Halving_the_step_changes_the_peak_by_less_than_a_thousandth(SupplyConnection connection)
     {
-        var found = Inrush.Solve(Close(ThreePhase(Lossy, connection, 1.7), 0.8, source_H: 1e-4, resistance: 0.1, air_H: 0.001), Cancel);
+        var found = Inrush.Solve(Close(ThreePhase(Lossy, connection, 1.7), 0.8, source_H: 1e-4, resistance: 0.1), Cancel);
         Assert.InRange(found.HalvingChange, 1e-12, 1e-3);
     }
 

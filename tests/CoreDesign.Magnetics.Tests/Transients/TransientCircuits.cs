@@ -58,13 +58,24 @@ internal static class TransientCircuits
             [.. new[] { "A", "B", "C" }.Select((l, i) => new Winding(l, WindingPhase.A + i, [new Coil("limb" + l, Turns)]))]);
     }
 
-    public static Energizing Close(MagneticCircuit circuit, double residual = 0, double angle_deg = 0, double source_H = 0, double resistance = 0, double air_H = 0) => new()
+    /// <summary>Air inside the coil beside the steel, linked with it: adds its inductance to the ring's.</summary>
+    public static MagneticCircuit WithAir(MagneticCircuit ring, double inductance_H)
+    {
+        // Its own loop, so that it is linked with the coil alone.
+        CircuitBranch Half(string name, string from, string to) => new() { Name = name, From = from, To = to, Area_m2 = 1, Reluctance_A_per_Wb = Turns * Turns / inductance_H / 2 };
+        return ring with
+        {
+            Branches = [.. ring.Branches, Half("air", "r", "s"), Half("airBack", "s", "r")],
+            Windings = [.. ring.Windings.Select(w => w with { Coils = [.. w.Coils, new Coil("air", Turns)] })],
+        };
+    }
+
+    public static Energizing Close(MagneticCircuit circuit, double residual = 0, double angle_deg = 0, double source_H = 0, double resistance = 0) => new()
     {
         Circuit = circuit,
         Angle_rad = angle_deg * Math.PI / 180,
         ResidualLinkage_Wb = Inrush.ResidualLinkage_Wb(circuit, residual),
         SourceInductance_H = source_H,
-        AirPathInductance_H = [.. circuit.Windings.Select(_ => air_H)],
         Resistance_ohm = [.. circuit.Windings.Select(_ => resistance)],
     };
 }
