@@ -63,7 +63,7 @@ public static class Places
         new("import-good", "/steels/import") { Enter = v => PasteAsync(v, Records.Certificate("Good certificate"), "Good certificate, as it would be kept") },
         new("import-warned", "/steels/import") { Enter = v => PasteAsync(v, Records.Certificate("Certificate without density").Replace("density_kg_m3,7650\n", "", StringComparison.Ordinal), "Worth a look") },
         new("import-errors", "/steels/import") { Enter = v => PasteAsync(v, Records.BrokenCertificate, "270") },
-        .. Chapters("order", "steels", "geometry", "joints", "solver", "building-factor", "sheet", "files", "circuits", "api", "cautions", "published"),
+        .. Chapters("order", "steels", "geometry", "joints", "solver", "building-factor", "sheet", "files", "circuits", "api", "cautions", "published", "margins"),
         new("handbook-missing", "/handbook/no-such-chapter"),
         new("not-found", "/no/such/page") { Expected = Missing },
         new("error", "/error"),
@@ -90,11 +90,11 @@ public static class Places
         await StudiedAsync(v);
     }
 
-    // Levers and voltage curve come in the pause after the answer.
+    // Levers, voltage curve and margins come in the pause after the answer.
     private static async Task StudiedAsync(Visitor v)
     {
         await Expect(v.Page.Locator("button.lever:enabled").First).ToBeVisibleAsync();
-        await Expect(v.Page.Locator("[data-chart]")).ToHaveCountAsync(5);
+        await Expect(v.Page.Locator("[data-chart]")).ToHaveCountAsync(8);
     }
 
     private static async Task TypeAsync(Visitor v, params (string Path, string Text)[] fields)

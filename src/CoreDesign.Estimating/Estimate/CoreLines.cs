@@ -14,7 +14,7 @@ internal static class CoreLines
     {
         var lines = LineCurrents.Of(solved.Solution);
         var supply = solved.Solution.Circuit.Supply;
-        var capacitive = Capacitive_A(design, rated, supply.Voltage_V);
+        var capacitive = Capacitive_A(design, rated, supply.Voltage_V) * supply.Frequency_Hz / rated.Supply.Frequency_Hz;
         return capacitive == 0 ? lines : [.. lines.Select((l, k) => (l.Name, Leading(l.Current_A, capacitive, k)))];
     }
 

@@ -54,7 +54,7 @@ public static class EstimateDesign
         }
     }
 
-    /// <summary>Why the design is beyond any law at rated or at highest voltage; else null.</summary>
+    /// <summary>Why the design is beyond any law at rated voltage, or at a lowest frequency of its own; else null.</summary>
     private static string? FarAboveSaturation(ResolvedDesign design)
     {
         var extreme = design.LimbFluxDensity_T(design.HighestVoltage_percent, design.LowestFrequency_Hz);
@@ -63,7 +63,7 @@ public static class EstimateDesign
             return Text($"The limbs would have to carry {rated:0.0#} T; the steel saturates at {design.Steel.SaturationPolarization_T.Value} T, and no figure is given beyond {Highest_T} T. Take more turns, a larger limb or a lower voltage.");
         }
 
-        return extreme <= Highest_T ? null : Text(
+        return extreme <= Highest_T || design.LowestFrequency_Hz >= design.Supply.Frequency_Hz ? null : Text(
             $"At {design.HighestVoltage_percent} % voltage and {design.LowestFrequency_Hz} Hz the limbs would have to carry {extreme:0.0#} T; the steel saturates at {design.Steel.SaturationPolarization_T.Value} T, and no figure is given beyond {Highest_T} T. Take a lower highest voltage, a higher lowest frequency, more turns or a larger limb.");
     }
 

@@ -53,8 +53,8 @@ public static class FieldCatalog
         new("margins.inrush.residual_percent", "Residual flux", "B", "%", 0, 100, "no core keeps more than its peak", "Flux left in the core, in per cent of its peak at rated voltage"),
         new("margins.inrush.switchingAngle_deg", "Switching angle", "α", "°", 0, 360, "one period of the voltage", "Angle of the first phase's voltage when the switch closes; 0, at its zero, is the worst"),
         new("margins.inrush.sourceInductance_mH", "Source inductance", "L", "mH", 0, 10_000, "from a stiff supply to a weak high-voltage line", "Inductance of the supply in each line, seen from the excited winding; 0 for a stiff supply"),
-        new("margins.inrush.airCoreInductance_mH", "Air-core inductance", "L", "mH", 0.00001, 1_000_000, "from one turn to the largest high-voltage winding", "Inductance of one phase of the excited winding with its limb saturated through"),
-        new("margins.inrush.resistance_ohm", "Resistance", "R", "ohm", 0, 1000, "winding and supply of one phase", "Winding and supply together, one phase; it wears the inrush off"),
+        new("margins.inrush.airCoreInductance_mH", "Air-core inductance", "L", "mH", 0.0001, 1_000_000, "from one turn to the largest high-voltage winding", "Inductance of one phase of the excited winding with its limb saturated through"),
+        new("margins.inrush.resistance_ohm", "Inrush resistance", "R", "ohm", 0, 1000, "winding and supply of one phase", "Winding and supply together, one phase; it wears the inrush off"),
     ];
 
     private static readonly Dictionary<string, Field> ByPath = All.ToDictionary(f => f.Path, StringComparer.Ordinal);

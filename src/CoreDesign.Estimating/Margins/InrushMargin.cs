@@ -19,13 +19,13 @@ internal static class InrushMargin
         "√2·U/(ω·L)·(Br + Bn·(1 + cos α) − Js)/Bn for the first phase alone, L air-core and source inductance, no current below saturation (form of Specht 1951, from memory); with resistance the transient of an R-L circuit from the instant of saturation (form of Holcomb 1961, from memory).";
 
     public const string Assumptions =
-        "The first phase closes at the switching angle; its residual flux lies in the direction in which its flux sets out, the two other phases hold half of it against that, so that the limbs add to zero. The hysteresis starts as from the demagnetised state. Saturated steel goes on with the slope of vacuum; air inside each winding and round its limb's ends lies beside the steel, so sized that a limb saturated through has the air-core inductance.";
+        "The first phase closes at the switching angle; its residual flux lies in the direction in which its flux sets out, the two other phases hold half of it against that, so that the limbs add to zero. The hysteresis starts as from the demagnetised state. Saturated steel goes on with the slope of vacuum; air inside each winding and round its limb's ends lies beside the steel, so sized that a limb saturated through has the air-core inductance. Capacitive current is not in it.";
 
     public static InrushResult Of(CoreAtWork core, CoreSolution atRated, CancellationToken cancel)
     {
         var input = core.Design.Inputs.Margins!.Inrush!;
         var empty = new InrushResult { Definition = Definition, FormulaText = FormulaText, Assumptions = $"{Assumptions} Air-core inductance where it is not given: {AirCoreOfDesign.Source}." };
-        var circuit = AirCoreOfDesign.Spread(atRated.Solution.Circuit, core.Design.Geometry);
+        var circuit = StudyMargins.Laden(atRated);
         var ends = AirCoreOfDesign.EndShare(core.Design.Geometry);
         var least_mH = 1000 * AirPaths.Least_H(circuit, circuit.Windings.First(w => w.Phase != WindingPhase.Closed), ends);
         if (input.AirCoreInductance_mH < least_mH)

@@ -22,7 +22,7 @@ internal sealed class MarginsReader(DesignResolver resolver)
     }
 
     /// <summary>The inputs with the air-core inductance that follows from the core where none is given.</summary>
-    public MarginsInput WithAirCore(MarginsInput read, CoreGeometry geometry, double turns)
+    public MarginsInput WithAirCore(MarginsInput read, CoreGeometry geometry, double turns, int woundLimbs)
     {
         if (read.Inrush!.AirCoreInductance_mH is not null)
         {
@@ -30,7 +30,7 @@ internal sealed class MarginsReader(DesignResolver resolver)
         }
 
         resolver.Derive("margins.inrush.airCoreInductance_mH");
-        return read with { Inrush = read.Inrush with { AirCoreInductance_mH = 1000 * AirCoreOfDesign.Inductance_H(geometry, turns) } };
+        return read with { Inrush = read.Inrush with { AirCoreInductance_mH = 1000 * AirCoreOfDesign.Inductance_H(geometry, turns, woundLimbs) } };
     }
 
     public MarginsInput Read(MarginsInput? given, double windingResistance_ohm)

@@ -3,6 +3,7 @@ using CoreDesign.Estimating.Contracts;
 using CoreDesign.Estimating.Estimate;
 using CoreDesign.Estimating.Steels;
 using CoreDesign.Magnetics.Circuits;
+using CoreDesign.Magnetics.Cores;
 
 namespace CoreDesign.Estimating.Margins;
 
@@ -28,6 +29,13 @@ public static class StudyMargins
             DcBias = DcBiasMargin.Of(core, atRated, cancel),
             Notes = [.. Notes(core.Design, curve)],
         };
+    }
+
+    /// <summary>The circuit of a solved core with the extra losses that its zones were found to have.</summary>
+    internal static MagneticCircuit Laden(CoreSolution core)
+    {
+        var solution = core.Solution;
+        return solution.Circuit with { Branches = [.. solution.Circuit.Branches.Select((b, i) => b with { ExtraLoss_A_s_per_Wb = solution.ExtraLossCoefficient(i) })] };
     }
 
     /// <summary>Runs a solve of which a design as such is not refused; where it has no solution, the reason is told instead.</summary>

@@ -23,6 +23,7 @@ public static class DesignSheet
             [new Heading("Steps of the limb section"), GeometryTables.Steps(e)],
             [new Heading("Where it comes from"), ResultTables.Shares(e), new Heading("Mass"), GeometryTables.Mass(e)]));
         blocks.AddRange(EvidenceBlocks.All(request.Study));
+        blocks.AddRange(MarginBlocks.All(request.Study));
         blocks.Add(new Columns([
             (3, [new Heading("Harmonics of the line current"), ResultTables.Harmonics(e)]),
             (2, [new Heading("No-load current"), ResultTables.Currents(e), new Heading("Energy balance"), ResultTables.Energy(e)])]));

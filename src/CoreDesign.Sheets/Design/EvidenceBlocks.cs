@@ -7,7 +7,7 @@ namespace CoreDesign.Sheets.Design;
 /// <summary>The page's charts on paper, two to a row, from the same definitions.</summary>
 internal static class EvidenceBlocks
 {
-    private static readonly ChartOptions Half = new() { Width = 240, Height = 150, TextSize = 7.5 };
+    internal static readonly ChartOptions Half = new() { Width = 240, Height = 150, TextSize = 7.5 };
 
     public static IEnumerable<Block> All(Study study)
     {
@@ -27,5 +27,5 @@ internal static class EvidenceBlocks
         }
     }
 
-    private static FigureBlock Figure(Chart chart) => new(chart.Scene);
+    internal static FigureBlock Figure(Chart chart) => new(chart.Scene);
 }

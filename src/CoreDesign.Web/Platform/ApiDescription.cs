@@ -69,6 +69,8 @@ internal static class ApiDescription
         [typeof(CapacitanceInput)] = "capacitance.",
         [typeof(JointInput)] = "joint.",
         [typeof(ModelInput)] = "model.",
+        [typeof(MarginsInput)] = "margins.",
+        [typeof(InrushInput)] = "margins.inrush.",
     };
 }
 

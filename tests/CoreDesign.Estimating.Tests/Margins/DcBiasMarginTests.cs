@@ -23,14 +23,16 @@ public sealed class DcBiasMarginTests
     }
 
     [Fact]
-    public void Bias_adds_flux_loss_current_and_even_harmonics()
+    public void Bias_adds_flux_current_and_even_harmonics()
     {
         var r = Designs.Solve(Single);
         var d = Solve(Single, 2 * r.NoLoadCurrent_A)!;
         Assert.Null(d.Reason);
         Assert.True(d.PeakFluxDensity_T > r.Margin.PeakAtRated_T + 0.05);
         Assert.Equal(r.Margin.PeakAtRated_T + d.Offset_T!.Value, d.PeakFluxDensity_T!.Value, 5e-3);
-        Assert.True(d.NoLoadLoss_W > r.NoLoadLoss_W);
+
+        // The law's loops keep their area when their middle moves, and the swing is the same.
+        Assert.Equal(r.NoLoadLoss_W, d.NoLoadLoss_W!.Value, 0.01 * r.NoLoadLoss_W);
         Assert.True(d.NoLoadCurrent_A > 2 * r.NoLoadCurrent_A);
         var line = Assert.Single(d.Lines);
         Assert.Equal(2 * r.NoLoadCurrent_A, line.Waveform_A.Average(), 1e-4 * r.NoLoadCurrent_A);

@@ -1,4 +1,5 @@
 using System.Globalization;
+using System.Text.Json.Nodes;
 using CoreDesign.Estimating.Contracts;
 using CoreDesign.Estimating.Demo;
 using CoreDesign.Estimating.Estimate;
@@ -111,6 +112,26 @@ public sealed class MarginsTests(ITestOutputHelper output)
     {
         var outcome = EstimateDesign.Run(Single with { Order = Single.Order! with { LowestFrequency_Hz = 20 } }, SteelLibrary.Catalog, TestContext.Current.CancellationToken);
         Assert.StartsWith("At 110 % voltage and 20 Hz the limbs would have to carry 4.4 T", outcome.Unsolvable!.Reason, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void Study_kept_from_before_there_were_margins_still_opens()
+    {
+        var study = StudyDesign.Run(Single, SteelLibrary.Catalog, TestContext.Current.CancellationToken).Value!;
+        var old = JsonNode.Parse(DesignJson.Write(study))!.AsObject();
+        Assert.True(old.Remove("margins"));
+        var estimate = old["estimate"]!.AsObject();
+        Assert.True(estimate["margin"]!.AsObject().Remove("lowestFrequency_Hz"));
+        Assert.True(estimate["inputs"]!.AsObject().Remove("margins"));
+        Assert.True(estimate["inputs"]!["order"]!.AsObject().Remove("lowestFrequency_Hz"));
+
+        var read = DesignJson.ReadStored<Study>(old.ToJsonString());
+        Assert.Null(read.Margins);
+        Assert.Null(read.Estimate.Margin.LowestFrequency_Hz);
+        Assert.Equal(study.Estimate.Margin.AtHighest_percent, read.Estimate.Margin.AtHighest_percent);
+        var back = DesignJson.ReadStored<Study>(DesignJson.Write(study));
+        Assert.Equal(study.Margins!.Inrush.Peak_A, back.Margins!.Inrush.Peak_A);
+        Assert.Equal(study.Margins.Inrush.Lines[0].Current_A, back.Margins.Inrush.Lines[0].Current_A);
     }
 
     [Fact]

@@ -147,6 +147,8 @@ public class ChartTests
         foreach (var study in new Study[] { StudyFixture.ThreeLimb(), StudyFixture.SinglePhase() })
         {
             charts.AddRange([EvidenceCharts.FluxOverPeriod(study.Estimate, o), EvidenceCharts.CurrentOverPeriod(study.Estimate, o), EvidenceCharts.Loop(study.Estimate, 0, o), HarmonicsChart.Of(study.Estimate, o), VoltageChart.Of(study, o), SharesChart.Of(study.Estimate, o)]);
+            var margins = MarginsFixture.Of(study);
+            charts.AddRange([VoltageChart.OfVoltsPerHertz(study.Estimate, margins, o), MarginCharts.PeakFluxDensity(study.Estimate, study.VoltageCurve, margins, o), MarginCharts.Inrush(margins.Inrush, o), MarginCharts.DcBias(study.Estimate, margins.DcBias!, o)]);
         }
 
         charts.AddRange([SteelCharts.Magnetization(Steel("M85-23P", 1), null, o), SteelCharts.Loss(Steel("M85-23P", 1), null, o), SteelCharts.Magnetization(Steel("M85-23P", 1), Steel("new", 0.97), o)]);

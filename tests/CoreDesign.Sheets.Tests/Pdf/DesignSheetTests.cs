@@ -36,6 +36,28 @@ public class DesignSheetTests
     }
 
     [Fact]
+    public void Margins_stand_on_the_sheet_with_their_definitions()
+    {
+        var study = StudyFixture.ThreeLimb();
+        using var pdf = Open(SheetRequests.Of(study with { Margins = MarginsFixture.Of(study) }));
+        var text = Text(pdf);
+        string[] wanted =
+        [
+            "Margins to saturation", "111.2\u00a0%", "Voltage for 5 times the current", "28\u2009660\u00a0A", "29\u2009170\u00a0A", "27\u2009950\u00a0A", "Direct current in each phase",
+            "Inrush: Highest current after closing. The first phase closes first.", "Closed formula: A closed form.", "Over-voltage: Voltage at which", "Rated voltage at other frequencies.", "For planning.",
+        ];
+        Assert.All(wanted, w => Assert.Contains(Plain(w), Plain(text), StringComparison.Ordinal));
+        static string Plain(string s) => string.Join(' ', s.Split((char[])[' ', '\n', '\r', '\u00a0', '\u2009'], StringSplitOptions.RemoveEmptyEntries));
+    }
+
+    [Fact]
+    public void Study_from_before_there_were_margins_prints_without_them()
+    {
+        using var pdf = Open(SheetRequests.Of(StudyFixture.ThreeLimb() with { Margins = null }));
+        Assert.DoesNotContain("How the margins are defined", Text(pdf), StringComparison.Ordinal);
+    }
+
+    [Fact]
     public void Key_figures_of_the_study_stand_on_the_sheet()
     {
         var study = StudyFixture.ThreeLimb();

@@ -149,6 +149,7 @@ public sealed class DesignSessionTests : IDisposable
             Estimate = (d, _) => Samples.Ok(estimate(d)),
             Levers = (_, _, _) => [],
             VoltageCurve = (_, _, _) => [],
+            Margins = (_, _) => Samples.Margins,
             Steels = () => SteelLibrary.Catalog,
         };
         return new(engine, services.GetRequiredService<DesignStore>(), services.GetRequiredService<DraftStore>(), () => { });

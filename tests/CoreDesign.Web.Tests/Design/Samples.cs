@@ -59,6 +59,15 @@ internal static class Samples
         SteelDataRevision = "test",
     };
 
+    public static MarginsResult Margins { get; } = new()
+    {
+        FluxCurve = [],
+        FluxCurveDefinition = "Rated voltage, other frequencies.",
+        OverVoltage = new() { CurrentMultiple = 5, Voltage_percent = 111.2, PeakFluxDensity_T = 1.875, Definition = "Voltage for a multiple." },
+        Inrush = new() { Peak_A = 28_700, PeakOverRated = 14, PeakLine = "A", PeakTime_ms = 10, FormulaLossless_A = 29_200, FormulaWithResistance_A = 29_200, FormulaText = "Closed form.", Definition = "Highest current.", Assumptions = "First phase first." },
+        Notes = [new("protection", "For planning.")],
+    };
+
     public static Outcome<EstimateResult> Ok(EstimateResult estimate) => new() { Value = estimate };
 
     public static LeverResult Lever(DesignInput design) => new()

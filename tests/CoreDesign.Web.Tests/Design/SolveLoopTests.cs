@@ -16,8 +16,22 @@ public sealed class SolveLoopTests
 
         await loop.RunAsync();
 
-        Assert.Equal([(true, false), (true, true)], shown);
+        Assert.Equal([(true, false), (true, true), (true, true)], shown);
         Assert.False(loop.IsEstimating || loop.IsStudying);
+    }
+
+    [Fact]
+    public async Task Levers_and_curve_are_shown_before_the_margins()
+    {
+        var state = new DesignPageState();
+        state.Load(FormReader.Texts(Samples.Input));
+        var shown = new List<(bool Levers, bool Margins)>();
+        using var loop = Loop(Engine(), state, () => shown.Add((state.Levers is not null, state.Margins is not null)));
+
+        await loop.RunAsync();
+
+        Assert.Equal([(false, false), (true, false), (true, true)], shown);
+        Assert.Same(Samples.Margins, state.Margins);
     }
 
     [Fact]
@@ -138,6 +152,7 @@ public sealed class SolveLoopTests
             Estimate = (_, _) => Samples.Ok(Samples.Estimate),
             Levers = (d, _, _) => [Samples.Lever(d)],
             VoltageCurve = (_, _, _) => [],
+            Margins = (_, _) => Samples.Margins,
             Steels = () => steels,
         };
     }

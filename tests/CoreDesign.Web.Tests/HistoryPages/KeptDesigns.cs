@@ -40,6 +40,7 @@ internal sealed class KeptDesigns : IDisposable
         Estimate = (design, cancel) => EstimateDesign.Run(design, SteelLibrary.Catalog, cancel),
         Levers = (_, _, _) => [],
         VoltageCurve = (_, _, _) => [],
+        Margins = (_, _) => null,
         Steels = () => SteelLibrary.Catalog,
     };
 

@@ -12,6 +12,9 @@ public sealed record DesignEngine
 
     public required Func<DesignInput, EstimateResult, CancellationToken, IReadOnlyList<VoltagePointResult>> VoltageCurve { get; init; }
 
+    /// <summary>The margins to saturation beyond the estimate's, which take longest; null where they can't be solved.</summary>
+    public required Func<DesignInput, CancellationToken, MarginsResult?> Margins { get; init; }
+
     /// <summary>The grades to choose from; works' own steels may come and go while the page is open.</summary>
     public required Func<SteelCatalog> Steels { get; init; }
 }

@@ -137,7 +137,7 @@ public sealed partial class DesignPage
         if (State.Estimate is { } estimate)
         {
             drawing.Paint(estimate, reading);
-            evidence.Make(estimate, State.VoltageCurve);
+            evidence.Make(estimate, State.VoltageCurve, State.Margins);
             spoken = State.Answered == State.Serial ? VerdictFigures.Of(estimate, null).Spoken : spoken;
         }
 

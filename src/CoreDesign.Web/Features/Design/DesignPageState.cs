@@ -22,6 +22,9 @@ public sealed class DesignPageState
     public DerivedTexts Derived { get; private set; } = DerivedTexts.None;
     public IReadOnlyList<LeverResult>? Levers { get; private set; }
     public IReadOnlyList<VoltagePointResult>? VoltageCurve { get; private set; }
+
+    /// <summary>Null until they are solved, and for a revision kept from before there were margins.</summary>
+    public MarginsResult? Margins { get; private set; }
     public Unsolvable? Unsolvable { get; private set; }
 
     /// <summary>Grows with every edit; an answer to an older one is dropped.</summary>
@@ -150,6 +153,18 @@ public sealed class DesignPageState
         return true;
     }
 
+    /// <summary>Takes the margins of an edit; false where they came too late.</summary>
+    public bool Accept(Solving solving, MarginsResult margins)
+    {
+        if (solving.Serial != Serial)
+        {
+            return false;
+        }
+
+        Margins = margins;
+        return true;
+    }
+
     /// <summary>Opens a stored revision with its figures as they were saved; nothing is solved.</summary>
     public void Load(DesignInput design, Study study)
     {
@@ -157,6 +172,7 @@ public sealed class DesignPageState
         Show(Typed, design, study.Estimate);
         Levers = study.Levers;
         VoltageCurve = study.VoltageCurve;
+        Margins = study.Margins;
         Answered = Serial;
     }
 
@@ -174,6 +190,7 @@ public sealed class DesignPageState
         Solved = texts;
         Levers = null;
         VoltageCurve = null;
+        Margins = null;
     }
 
     private void Step(DesignText texts)

@@ -114,7 +114,7 @@ public sealed class DesignSession : IAsyncDisposable
     public async Task<SaveResult> SaveAsync(string title, string note, string author, int? onTop = null)
     {
         await Loop.CompleteAsync(CancellationToken.None);
-        var study = new Study { Estimate = State.Estimate!, VoltageCurve = State.VoltageCurve ?? [], Levers = State.Levers ?? [] };
+        var study = new Study { Estimate = State.Estimate!, VoltageCurve = State.VoltageCurve ?? [], Levers = State.Levers ?? [], Margins = State.Margins };
         var next = new NewRevision(title, note, author, State.SolvedDesign, study);
         var result = Base is { } open
             ? await designs.SaveAsync(open.Info.Id, onTop ?? NewestRevision, next)

@@ -32,6 +32,7 @@ public static class FormLayout
             new(FormPaths.Voltages, FieldKind.NumberList) { Label = "Rated voltages" },
             new("order.highestVoltage_percent") { Derivable = true, Step = 1 },
             new("order.frequency_Hz"),
+            new("order.lowestFrequency_Hz") { Derivable = true, Step = 0.5 },
             new("order.askedNoLoadLoss_W"),
             new("order.askedNoLoadCurrent_percent"),
         ]),
@@ -102,6 +103,16 @@ public static class FormLayout
             new(FormPaths.ZeroSequence) { Label = "Zero sequence", Derivable = true, Step = 0.1 },
             new("model.buildingFactor") { Derivable = true, Step = 0.01 },
             new("model.temperature_C") { Derivable = true, Step = 5 },
+        ]),
+        new("margins", "Margins",
+        [
+            new("margins.currentMultiple") { Derivable = true, Step = 1 },
+            new("margins.dcBias_A") { Derivable = true },
+            new("margins.inrush.residual_percent") { Derivable = true, Step = 5 },
+            new("margins.inrush.switchingAngle_deg") { Derivable = true, Step = 5 },
+            new("margins.inrush.sourceInductance_mH") { Derivable = true },
+            new("margins.inrush.airCoreInductance_mH") { Derivable = true },
+            new("margins.inrush.resistance_ohm") { Derivable = true },
         ]),
     ];
 

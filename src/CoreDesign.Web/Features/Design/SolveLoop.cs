@@ -3,7 +3,7 @@ using CoreDesign.Estimating.LimbSizing;
 namespace CoreDesign.Web.Features.Design;
 
 /// <summary>
-/// Answers each edit: the estimate at once, levers and voltage curve in the pause after it. A newer edit cancels what is still
+/// Answers each edit: the estimate at once, levers, voltage curve and margins in the pause after it. A newer edit cancels what is still
 /// being solved for an older one. Call it where the page renders; only the solving itself leaves that thread.
 /// </summary>
 public sealed class SolveLoop(DesignEngine engine, DesignPageState state, Action changed) : IDisposable
@@ -74,16 +74,24 @@ public sealed class SolveLoop(DesignEngine engine, DesignPageState state, Action
         }
     }
 
-    /// <summary>Solves levers and curve now if they are missing, for a save that can't wait for the pause.</summary>
+    /// <summary>Solves levers, curve and margins now if they are missing, for a save that can't wait for the pause. The margins come last: they take longest.</summary>
     public async Task CompleteAsync(CancellationToken cancel)
     {
+        var solving = state.Begin();
+        var design = state.SolvedDesign;
         if (state.Estimate is { } estimate && (state.Levers is null || state.VoltageCurve is null))
         {
-            var solving = state.Begin();
-            var design = state.SolvedDesign;
             var curve = await Task.Run(() => engine.VoltageCurve(design, estimate, cancel), cancel);
             var levers = await Task.Run(() => engine.Levers(design, estimate, cancel), cancel);
-            state.Accept(solving, levers, curve);
+            if (state.Accept(solving, levers, curve))
+            {
+                changed();
+            }
+        }
+
+        if (state.Estimate is not null && state.Margins is null && await Task.Run(() => engine.Margins(design, cancel), cancel) is { } margins)
+        {
+            state.Accept(solving, margins);
         }
     }
 

@@ -24,7 +24,7 @@ public sealed record VerdictFigures(VerdictLine Loss, VerdictLine Current, Verdi
             Limited("No-load loss", now.NoLoadLoss_W, saved?.NoLoadLoss_W, order?.AskedNoLoadLoss_W, "W", now.NoLoadLoss_W < 100 ? 1 : 0, "W"),
             Limited("No-load current", now.NoLoadCurrent_percent, saved?.NoLoadCurrent_percent, order?.AskedNoLoadCurrent_percent, "%", decimals, "points"),
             Margin("at 100 %", now.Margin.AtRated_percent, saved?.Margin.AtRated_percent, now.Margin.PeakAtRated_T),
-            Margin($"at {Figures.Plain(highest, 1)} %", now.Margin.AtHighest_percent, saved?.Margin.AtHighest_percent, now.Margin.PeakAtHighest_T),
+            Margin($"at {Figures.Plain(highest, 1)} %{AtLowest(now)}", now.Margin.AtHighest_percent, saved?.Margin.AtHighest_percent, now.Margin.PeakAtHighest_T),
             new("Core mass", Figures.Fixed(now.Mass_kg.Total, now.Mass_kg.Total < 100 ? 1 : 0), "kg", Change(now.Mass_kg.Total, saved?.Mass_kg.Total, now.Mass_kg.Total < 100 ? 1 : 0, "kg"), 0, null, "", "", false));
     }
 
@@ -32,6 +32,9 @@ public sealed record VerdictFigures(VerdictLine Loss, VerdictLine Current, Verdi
     public string Spoken =>
         $"No-load loss {Loss.Figure} {Loss.Unit}, {Loss.Standing}. No-load current {Current.Figure} per cent, {Current.Standing}. "
         + $"Margin to saturation {AtRated.Figure} per cent {AtRated.Name}, {AtHighest.Figure} per cent {AtHighest.Name}. Core mass {Mass.Figure} kilograms.";
+
+    private static string AtLowest(EstimateResult now) =>
+        now.Margin.LowestFrequency_Hz is { } low && now.Inputs.Order?.Frequency_Hz is { } rated && low < rated ? $", {Figures.Plain(low, 2)} Hz" : "";
 
     private static VerdictLine Limited(string name, double value, double? saved, double? asked, string unit, int decimals, string changeUnit)
     {

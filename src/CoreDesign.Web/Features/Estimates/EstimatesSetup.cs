@@ -1,5 +1,6 @@
 using CoreDesign.Estimating.Circuits;
 using CoreDesign.Estimating.Estimate;
+using CoreDesign.Estimating.Margins;
 using CoreDesign.Web.Features.Circuits;
 using CoreDesign.Web.Features.Design;
 using CoreDesign.Web.Features.Designs;
@@ -27,6 +28,7 @@ public static class EstimatesSetup
                 Estimate = (design, cancel) => EstimateDesign.Run(design, steels.Current, cancel),
                 Levers = (design, now, cancel) => Levers.Solve(design, now, steels.Current, cancel),
                 VoltageCurve = (design, _, cancel) => VoltageSweep.Run(design, steels.Current, cancel).Value ?? [],
+                Margins = (design, cancel) => StudyMargins.Run(design, steels.Current, cancel).Value,
                 Steels = () => steels.Current,
             };
         });
