@@ -49,7 +49,7 @@ internal sealed class CoreAtWork
     /// <summary>Steady state at another frequency as well; the sheet's law stays that of the rated one, carried by its own eddy and excess terms.</summary>
     /// <exception cref="NotConvergedException">No steady state.</exception>
     public CoreSolution SolveAt(double voltage_percent, double frequency_Hz, CancellationToken cancel) =>
-        Solve(Design.Excited with { Supply = Design.Supply with { Frequency_Hz = frequency_Hz } }, voltage_percent, cancel);
+        frequency_Hz == Design.Supply.Frequency_Hz ? SolveAt(voltage_percent, cancel) : Solve(Design.Excited with { Supply = Design.Supply with { Frequency_Hz = frequency_Hz } }, voltage_percent, cancel);
 
     /// <summary>Steady state with a winding fed, at a voltage in per cent of its own.</summary>
     /// <exception cref="NotConvergedException">No steady state.</exception>

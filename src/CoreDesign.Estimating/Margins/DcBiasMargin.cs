@@ -13,7 +13,7 @@ internal static class DcBiasMargin
     private const int HighestHarmonic = 13;
 
     public const string Definition =
-        "Rated voltage and frequency, the given direct current in each phase of the excited winding, winding resistance neglected: the mean flux is what makes the mean of each current the given one. The loss is the core's; what the direct current turns to heat in the winding is not in it. The steel's law gives a loop the same area wherever its middle lies, while measured sheets lose more under a bias: take the loss for a lower bound. Capacitive current is not in it.";
+        "Rated voltage and frequency, the given direct current in each phase of the excited winding, winding resistance neglected: the mean flux is what makes the mean of each current the given one. The loss is the core's; what the direct current turns to heat in the winding is not in it. The steel's law gives a loop the same area wherever its middle lies, while measured sheets lose more under a bias: take the loss for a lower bound. Capacitive current is not in it, and a closed delta, which hinders no steady flux, is left out.";
 
     /// <summary>Null where no direct current is asked for.</summary>
     public static DcBiasResult? Of(CoreAtWork core, CoreSolution atRated, CancellationToken cancel)
@@ -35,7 +35,7 @@ internal static class DcBiasMargin
 
     private static DcBiasResult Solved(DcBiasResult empty, CoreAtWork core, CoreSolution atRated, CancellationToken cancel)
     {
-        var s = DcBias.Solve(StudyMargins.Laden(atRated), empty.Bias_A, CoreAtWork.PointsPerPeriod, cancel);
+        var s = DcBias.Solve(StudyMargins.Laden(core.Design, atRated, tertiary: false), empty.Bias_A, CoreAtWork.PointsPerPeriod, cancel);
         var js = core.Sheet.SaturationPolarization_T;
         var (part, peak) = atRated.Core.Parts
             .Where(p => atRated.Core.Geometry.Parts.Any(g => g.Name == p.Part))

@@ -13,19 +13,19 @@ internal static class InrushMargin
     private const int MostPoints = 540;
 
     public const string Definition =
-        "Highest absolute value of any line current in three periods after the excited winding is put on rated voltage, all phases at one instant, other windings open: solved in time with the steel's own law, at a step of which half and whole are compared.";
+        "Highest absolute value of any line current in three periods after the excited winding is put on rated voltage, all phases at one instant, other windings open but for a closed delta: solved in time with the steel's own law, at a step of which half and whole are compared.";
 
     public const string FormulaText =
         "√2·U/(ω·L)·(Br + Bn·(1 + cos α) − Js)/Bn for the first phase alone, L air-core and source inductance, no current below saturation (form of Specht 1951, from memory); with resistance the transient of an R-L circuit from the instant of saturation (form of Holcomb 1961, from memory).";
 
     public const string Assumptions =
-        "The first phase closes at the switching angle; its residual flux lies in the direction in which its flux sets out, the two other phases hold half of it against that, so that the limbs add to zero. The hysteresis starts as from the demagnetised state. Saturated steel goes on with the slope of vacuum; air inside each winding and round its limb's ends lies beside the steel, so sized that a limb saturated through has the air-core inductance. Capacitive current is not in it.";
+        "The first phase closes at the switching angle; its residual flux lies in the direction in which its flux sets out, the two other phases hold half of it against that, so that the limbs add to zero. The hysteresis starts as from the demagnetised state. Saturated steel goes on with the slope of vacuum; air inside each winding and round its limb's ends lies beside the steel, so sized that a limb saturated through has the air-core inductance. A closed delta is taken without leakage to the excited winding. Capacitive current is not in it.";
 
     public static InrushResult Of(CoreAtWork core, CoreSolution atRated, CancellationToken cancel)
     {
         var input = core.Design.Inputs.Margins!.Inrush!;
         var empty = new InrushResult { Definition = Definition, FormulaText = FormulaText, Assumptions = $"{Assumptions} Air-core inductance where it is not given: {AirCoreOfDesign.Source}." };
-        var circuit = StudyMargins.Laden(atRated);
+        var circuit = StudyMargins.Laden(core.Design, atRated, DeltaCounts(core.Design, input));
         var ends = AirCoreOfDesign.EndShare(core.Design.Geometry);
         var least_mH = 1000 * AirPaths.Least_H(circuit, circuit.Windings.First(w => w.Phase != WindingPhase.Closed), ends);
         if (input.AirCoreInductance_mH < least_mH)
@@ -67,6 +67,14 @@ internal static class InrushMargin
             Lines = [.. found.Lines.Select(l => new InrushLineResult(l.Name, Thin(l.Current_A)))],
         };
     }
+
+    /// <summary>
+    /// A closed delta without resistance beside windings whose voltages add to zero without any drop asks for what holds already; how the two share what flows
+    /// there is not determined, and nothing is induced: it is left out.
+    /// </summary>
+    private static bool DeltaCounts(ResolvedDesign design, InrushInput input) =>
+        design.Tertiary is { } delta
+        && (delta.Resistance_ohm > 0 || input.Resistance_ohm > 0 || (input.SourceInductance_mH > 0 && design.Supply.Connection != SupplyConnection.Delta) || design.Supply.Connection == SupplyConnection.StarIsolated);
 
     /// <summary>The formulas count one direction; the flux may set out in either.</summary>
     private static InrushResult WithFormulas(InrushResult empty, CoreAtWork core, InrushInput input)

@@ -31,11 +31,15 @@ public static class StudyMargins
         };
     }
 
-    /// <summary>The circuit of a solved core with the extra losses that its zones were found to have.</summary>
-    internal static MagneticCircuit Laden(CoreSolution core)
+    /// <summary>
+    /// The circuit of the design as it stands, with the extra losses that the zones of the solved core were found to have. (The solved one may have its closed
+    /// delta settled for the steady state.)
+    /// </summary>
+    internal static MagneticCircuit Laden(ResolvedDesign design, CoreSolution solved, bool tertiary)
     {
-        var solution = core.Solution;
-        return solution.Circuit with { Branches = [.. solution.Circuit.Branches.Select((b, i) => b with { ExtraLoss_A_s_per_Wb = solution.ExtraLossCoefficient(i) })] };
+        var excitation = new CoreExcitation(design.Supply, design.Turns, design.Excited.Resistance_ohm, tertiary ? design.Tertiary : null) { WoundLimbs = design.WoundLimbs };
+        var circuit = solved.Core.With(excitation);
+        return circuit with { Branches = [.. circuit.Branches.Select((b, i) => b with { ExtraLoss_A_s_per_Wb = solved.Solution.ExtraLossCoefficient(i) })] };
     }
 
     /// <summary>Runs a solve of which a design as such is not refused; where it has no solution, the reason is told instead.</summary>

@@ -8,6 +8,8 @@ namespace CoreDesign.Magnetics.Transients;
 /// </summary>
 public static class AirPaths
 {
+    private const string Inside = "airIn ";
+
     /// <summary>What the saturated steel inside the coils gives a winding by itself; an air-core inductance can't be less.</summary>
     /// <param name="circuit">Whose branches the coils lie on.</param>
     /// <param name="winding">A winding on branches of steel.</param>
@@ -21,7 +23,7 @@ public static class AirPaths
     }
 
     /// <param name="circuit">With windings on branches of steel.</param>
-    /// <param name="inductance_H">Air-core inductance of each winding, shared by its coils as the squares of their turns; 0 for a winding that gets no air.</param>
+    /// <param name="inductance_H">Air-core inductance of each winding, shared by its coils as the squares of their turns; 0 for a winding that lies as close as can be to one that has air, and links what that links.</param>
     /// <param name="endShare">Of the air-core reluctance, what lies outside the coil; 0 to below 1.</param>
     /// <exception cref="CircuitException">An inductance below what the steel has by itself.</exception>
     public static MagneticCircuit Add(MagneticCircuit circuit, IReadOnlyList<double> inductance_H, double endShare)
@@ -56,8 +58,8 @@ public static class AirPaths
                 CircuitBranch Air(string name, double reluctance) => new() { Name = name + limb.Name, From = limb.From, To = limb.To, Area_m2 = 1, Reluctance_A_per_Wb = reluctance };
                 if (beside > 0)
                 {
-                    branches.Add(Air("airIn ", 1 / beside));
-                    coils.Add(coil with { Branch = "airIn " + limb.Name });
+                    branches.Add(Air(Inside, 1 / beside));
+                    coils.Add(coil with { Branch = Inside + limb.Name });
                 }
 
                 if (endShare > 0)
@@ -69,7 +71,12 @@ public static class AirPaths
             windings.Add(winding with { Coils = coils });
         }
 
-        return circuit with { Branches = branches, Windings = windings };
+        var air = branches.Select(b => b.Name).Where(n => n.StartsWith(Inside, StringComparison.Ordinal)).ToHashSet(StringComparer.Ordinal);
+        return circuit with
+        {
+            Branches = branches,
+            Windings = [.. windings.Zip(inductance_H, (w, l) => l > 0 ? w : w with { Coils = [.. w.Coils, .. w.Coils.Where(c => air.Contains(Inside + c.Branch)).Select(c => c with { Branch = Inside + c.Branch })] })],
+        };
     }
 
     private static double SteelPermeance_H(MagneticCircuit circuit, Coil coil)

@@ -32,6 +32,7 @@ public static class DcBias
     private const int MaxIterations = 60;
     private const int MostPeriods = 60;
     private const double Tolerance = 1e-6;
+    private const double Periodic = 1e-8;
 
     /// <param name="circuit">Single phase, or a star with its neutral: the only connections whose lines can carry direct current.</param>
     /// <param name="current_A">In each phase, into the winding's first end.</param>
@@ -111,7 +112,8 @@ public static class DcBias
         instant.Solve(z, 0, history, drive, imposed: true);
         instant.Accept(z);
         var first = instant.FirstCurrent;
-        for (var period = 0; period < MostPeriods; period++)
+        var unlike = double.PositiveInfinity;
+        for (var period = 0; period < MostPeriods && unlike > Periodic; period++)
         {
             cancel.ThrowIfCancellationRequested();
             double change = 0, largest = 0;
@@ -142,10 +144,12 @@ public static class DcBias
                 }
             }
 
-            if (period > 0 && change <= 1e-8 * largest)
-            {
-                break;
-            }
+            unlike = period == 0 ? unlike : change / Math.Max(largest, double.Epsilon);
+        }
+
+        if (unlike > Periodic)
+        {
+            throw new NotConvergedException($"With direct current no period repeated the one before in {MostPeriods}: the current still changes by {unlike:G3} of its peak.", unlike);
         }
 
         return new DcBiasSolution

@@ -41,6 +41,50 @@ public sealed class MarginsTests(ITestOutputHelper output)
         Assert.Contains(m.Notes, n => n.Key == "protection");
     }
 
+    public static TheoryData<string, string, int> Forms => Designs.Every();
+
+    [Theory]
+    [MemberData(nameof(Forms))]
+    public void Every_form_and_connection_has_all_margins(string form, string connection, int units)
+    {
+        var design = Designs.Of(form, connection, units) with { Margins = new() { DcBias_A = 1 } };
+        var m = Solve(design);
+        output.WriteLine(string.Create(CultureInfo.InvariantCulture, $"{form} {connection} {units}: ×5 at {m.OverVoltage.Voltage_percent:0.0} %, inrush {m.Inrush.Peak_A:G4} A, formula {m.Inrush.FormulaLossless_A:G4} A, bias offset {m.DcBias!.Offset_T:G3} T {m.DcBias.Reason}"));
+        Assert.Null(m.OverVoltage.Reason);
+        Assert.Null(m.Inrush.Reason);
+        Assert.InRange(m.Inrush.StepHalving_percent!.Value, 0, 0.1);
+        Assert.InRange(m.Inrush.Peak_A!.Value / m.Inrush.FormulaLossless_A!.Value, 0.6, 2);
+        Assert.Equal(connection is "D" or "Y", m.DcBias.Reason is not null);
+    }
+
+    [Fact]
+    public void Closed_delta_takes_part_in_the_inrush_only_behind_a_supply_that_gives_way()
+    {
+        // Stiff phase voltages add to zero, so that nothing is induced in a delta round all three.
+        double Peak(double source_mH, bool delta)
+        {
+            var m = Solve(Designs.Of("fiveLimb") with { Tertiary = delta ? new() { Turns = 20, Resistance_ohm = 0.001 } : null, Margins = new() { DcBias_A = 1, Inrush = new() { SourceInductance_mH = source_mH } } });
+            Assert.Null(m.Inrush.Reason);
+            Assert.Null(m.DcBias!.Reason);
+            return m.Inrush.Peak_A!.Value;
+        }
+
+        Assert.Equal(Peak(0, delta: false), Peak(0, delta: true), 1e-6 * Peak(0, delta: false));
+        Assert.NotEqual(Peak(0.05, delta: false), Peak(0.05, delta: true), 1e-3 * Peak(0.05, delta: false));
+    }
+
+    [Theory]
+    [InlineData("YN")]
+    [InlineData("Y")]
+    [InlineData("D")]
+    public void Closed_delta_without_resistance_leaves_every_margin(string connection)
+    {
+        var m = Solve(Designs.Of("threeLimb", connection) with { Tertiary = new(), Margins = new() { DcBias_A = 1 } });
+        Assert.Null(m.Inrush.Reason);
+        Assert.Null(m.OverVoltage.Reason);
+        Assert.Equal(connection != "YN", m.DcBias!.Reason is not null);
+    }
+
     [Fact]
     public void Over_voltage_gives_the_multiple_when_it_is_set_as_rated_voltage()
     {
