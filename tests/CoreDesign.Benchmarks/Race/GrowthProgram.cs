@@ -77,7 +77,7 @@ internal static class GrowthProgram
         };
     }
 
-    private static void Write(string folder, string key, string xName, string title, double[] x, IReadOnlyList<(string Name, double[] Y)> series, string unit)
+    private static void Write(string folder, string key, string xName, string title, double[] x, List<(string Name, double[] Y)> series, string unit)
     {
         Console.WriteLine($"| {xName} | {string.Join(" | ", series.Select(s => $"{s.Name}, {unit}"))} |");
         Console.WriteLine($"|{string.Concat(Enumerable.Repeat("---|", series.Count + 1))}");

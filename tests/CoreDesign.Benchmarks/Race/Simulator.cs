@@ -61,7 +61,7 @@ internal static class Simulator
         try
         {
             File.WriteAllText(Path.Combine(folder.FullName, "circuit.cir"), netlist);
-            var info = new ProcessStartInfo(Program, ["-b", "circuit.cir"]) { WorkingDirectory = folder.FullName, RedirectStandardOutput = true, RedirectStandardError = true };
+            var info = new ProcessStartInfo(Program, ["-b", "circuit.cir"]) { WorkingDirectory = folder.FullName, UseShellExecute = false, RedirectStandardOutput = true, RedirectStandardError = true };
             var clock = Stopwatch.StartNew();
             using var process = Process.Start(info)!;
             process.OutputDataReceived += (_, _) => { };
