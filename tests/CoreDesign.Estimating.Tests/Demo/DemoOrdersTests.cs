@@ -14,12 +14,13 @@ public sealed class DemoOrdersTests
     public static TheoryData<string> Keys => [.. DemoOrders.All.Select(o => o.Key)];
 
     [Fact]
-    public void Demo_orders_span_25_kVA_single_phase_to_40_MVA_and_say_that_they_are_invented()
+    public void Demo_orders_span_25_kVA_single_phase_to_100_MVA_five_limb_and_say_that_they_are_invented()
     {
         var ratings = DemoOrders.All.Select(o => o.Design.Order!.RatedPower_kVA!.Value).ToList();
 
         Assert.Equal(ratings.Order(), ratings);
-        Assert.Equal((25, 40_000), (ratings[0], ratings[^1]));
+        Assert.Equal((25, 100_000), (ratings[0], ratings[^1]));
+        Assert.Equal(["fiveLimb", "singlePhaseThreeLimb", "singlePhaseTwoLimb", "threeLimb"], DemoOrders.All.Select(o => o.Design.Core!.Form).Distinct().Order());
         Assert.Equal(1, DemoOrders.All[0].Design.Order!.Phases);
         Assert.Equal(DemoOrders.All.Count, DemoOrders.All.Select(o => o.Key).Distinct().Count());
         Assert.Equal(DemoOrders.All.Count, DemoOrders.All.Select(o => o.Design.Steel!.Grade).Distinct().Count());
