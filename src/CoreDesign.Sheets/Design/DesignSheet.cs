@@ -27,6 +27,12 @@ public static class DesignSheet
         blocks.Add(new Columns([
             (3, [new Heading("Harmonics of the line current"), ResultTables.Harmonics(e)]),
             (2, [new Heading("No-load current"), ResultTables.Currents(e), new Heading("Energy balance"), ResultTables.Energy(e)])]));
+        if (WindingFigures.Of(e).Count > 0)
+        {
+            blocks.Add(new Heading("Windings"));
+            blocks.Add(ResultTables.Windings(e));
+        }
+
         blocks.Add(new Heading(e.Geometry.Units > 1 ? "Plates of one unit" : "Plates"));
         blocks.Add(GeometryTables.Plates(e));
         blocks.AddRange(RestBlocks.All(request));

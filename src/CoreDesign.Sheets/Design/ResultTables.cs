@@ -44,6 +44,10 @@ internal static class ResultTables
                 v.Voltage_percent == 100)),
         ]);
 
+    public static Table Windings(EstimateResult e) => new(
+        [new Column("Winding", false), new Column("with", false), new Column("no load"), new Column("beside it", false)],
+        [.. WindingFigures.Of(e).Select(w => new Row(w.Winding, w.With, w.Current, w.Beside))]);
+
     public static Table Energy(EstimateResult e) => Table.KeyValues(
         ("Power at the terminals", With(Fixed(e.EnergyBalance.Terminal_W, 2), "W"), false, false),
         ("Loss in the material", With(Fixed(e.EnergyBalance.Material_W, 2), "W"), false, false),
