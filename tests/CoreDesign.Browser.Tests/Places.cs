@@ -26,6 +26,7 @@ public static class Places
         new("design-oversaturated", Demo) { Enter = async v => { await SolvedAsync(v); await TypeAsync(v, ("excitedWinding.turns", "12")); await StudiedAsync(v); } },
         new("design-sizing", Demo) { Enter = async v => { await SolvedAsync(v); await TypeAsync(v, ("excitedWinding.turns", ""), ("form.wantedFluxDensity_T", "1.65")); } },
         .. new[] { "LossDensity", "ExcitingPower", "Margin" }.Select(reading => new Place($"design-reading-{reading}", Demo) { Enter = v => ReadingAsync(v, reading) }),
+        new("design-direct-current", "/design?demo=pole-25") { Enter = DirectCurrentAsync },
         new("design-scrolled", Demo) { Enter = ScrolledAsync },
         new("design-half-typed", "/design/new") { Enter = v => TypeAsync(v, ("order.reference", "HR-1060"), ("order.ratedPower_kVA", "630"), ("order.frequency_Hz", "50")) },
         new("design-save-dialog", Demo) { Enter = async v => { await SolvedAsync(v); await OpenSaveAsync(v.Page); } },
@@ -133,6 +134,14 @@ public static class Places
     {
         await SolvedAsync(v);
         await v.Page.Locator($"input[name=reading][value={reading}]").CheckAsync();
+    }
+
+    private static async Task DirectCurrentAsync(Visitor v)
+    {
+        await SolvedAsync(v);
+        await TypeAsync(v, ("margins.dcBias_A", "2"));
+        await Expect(v.Page.Locator("[data-chart=dc-bias]")).ToBeVisibleAsync();
+        await v.Page.Locator("[data-margins] summary").ClickAsync();
     }
 
     private static async Task ScrolledAsync(Visitor v)

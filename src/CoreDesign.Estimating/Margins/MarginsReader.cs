@@ -30,7 +30,7 @@ internal sealed class MarginsReader(DesignResolver resolver)
         }
 
         resolver.Derive("margins.inrush.airCoreInductance_mH");
-        return read with { Inrush = read.Inrush with { AirCoreInductance_mH = 1000 * AirCoreOfDesign.Inductance_H(geometry, turns, woundLimbs) } };
+        return read with { Inrush = read.Inrush with { AirCoreInductance_mH = FourDigits(1000 * AirCoreOfDesign.Inductance_H(geometry, turns, woundLimbs)) } };
     }
 
     public MarginsInput Read(MarginsInput? given, double windingResistance_ohm)
@@ -55,4 +55,7 @@ internal sealed class MarginsReader(DesignResolver resolver)
             },
         };
     }
+
+    // The winding's sizes are guessed; what is used is what is shown.
+    private static double FourDigits(double x) => double.Parse(x.ToString("G4", CultureInfo.InvariantCulture), CultureInfo.InvariantCulture);
 }

@@ -64,6 +64,18 @@ public sealed class MarginsPanelTests : BunitContext
         Assert.Equal("at 110 %, 47.5 Hz", VerdictFigures.Of(low, null).AtHighest.Name);
     }
 
+    [Fact]
+    public void Last_margins_stay_greyed_while_new_ones_are_solved_and_go_where_none_come()
+    {
+        var panel = Show(Samples.Margins);
+        Assert.Empty(panel.FindAll("tr.faint"));
+        panel.Render(p => p.Add(x => x.Margins, null).Add(x => x.Busy, true));
+        Assert.Equal(3, panel.FindAll("tr.faint").Count);
+        Assert.Contains("First inrush peak, solved", Rows(panel).Keys);
+        panel.Render(p => p.Add(x => x.Margins, null).Add(x => x.Busy, false));
+        Assert.DoesNotContain("First inrush peak, solved", Rows(panel).Keys);
+    }
+
     [Theory]
     [InlineData(true, "Solving over-voltage and inrush…")]
     [InlineData(false, "a revision from before there were such margins has none")]

@@ -4,7 +4,11 @@ using CoreDesign.Sheets;
 namespace CoreDesign.Web.Features.Design;
 
 /// <summary>One line of the margins: what it is, its figure, what stands beside it, its definition; a line without a figure says why.</summary>
-public sealed record MarginLine(string Name, string Figure, string Beside, string Definition);
+public sealed record MarginLine(string Name, string Figure, string Beside, string Definition)
+{
+    /// <summary>True for what is solved after the estimate.</summary>
+    public bool Later { get; init; }
+}
 
 /// <summary>The margins to saturation in words and figures, the estimate's two first.</summary>
 public static class MarginFigures
@@ -22,14 +26,8 @@ public static class MarginFigures
             return lines;
         }
 
-        lines.Add(OverVoltage(m.OverVoltage));
-        lines.AddRange(Inrush(m.Inrush));
-        if (m.DcBias is { } bias)
-        {
-            lines.AddRange(DcBias(e, bias));
-        }
-
-        return lines;
+        IEnumerable<MarginLine> later = [OverVoltage(m.OverVoltage), .. Inrush(m.Inrush), .. m.DcBias is { } bias ? DcBias(e, bias) : []];
+        return [.. lines, .. later.Select(l => l with { Later = true })];
     }
 
     private static string AtExtreme(EstimateResult e)
